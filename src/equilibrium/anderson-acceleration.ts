@@ -1,0 +1,74 @@
+import { solveGeneral } from './linear-algebra.js';
+
+const DEPTH = 4;
+/** Largest step of a combination, in the logarithm of an activity coefficient; plain steps are not bounded. */
+const LARGEST_STEP = 5;
+
+/**
+ * Accelerates a fixed-point iteration x ← g(x) by combining the last few steps (D. G. Anderson, J. ACM 12 (1965) 547;
+ * the least-squares form of Walker & Ni, SIAM J. Numer. Anal. 49 (2011) 1715, eq. 2.2).
+ * When residuals stop shrinking it falls back on half a plain step, which converges wherever the map contracts on average.
+ */
+export class AndersonAcceleration {
+  readonly #size: number;
+  readonly #points: Float64Array[] = [];
+  readonly #residuals: Float64Array[] = [];
+  #lastNorm = Infinity;
+  #setbacks = 0;
+
+  constructor(size: number) {
+    this.#size = size;
+  }
+
+  /** Replaces `x` by the next point, given g(x). */
+  advance(x: Float64Array, image: Float64Array): void {
+    const residual = new Float64Array(this.#size);
+    let norm = 0;
+    for (let j = 0; j < this.#size; j++) {
+      residual[j] = image[j]! - x[j]!;
+      norm = Math.max(norm, Math.abs(residual[j]!));
+    }
+    if (norm > this.#lastNorm) this.#setbacks++;
+    this.#lastNorm = norm;
+    this.#points.push(x.slice());
+    this.#residuals.push(residual);
+    if (this.#points.length > DEPTH + 1) {
+      this.#points.shift();
+      this.#residuals.shift();
+    }
+    const accelerated = this.#setbacks < 12 && this.#points.length > 1 && this.#combine(x);
+    const weight = this.#setbacks < 3 ? 1 : 0.5;
+    if (!accelerated) for (let j = 0; j < this.#size; j++) x[j] = x[j]! + weight * residual[j]!;
+  }
+
+  #combine(x: Float64Array): boolean {
+    const last = this.#points.length - 1;
+    const residual = this.#residuals[last]!;
+    const matrix = new Float64Array(last * last);
+    const right = new Float64Array(last);
+    for (let a = 0; a < last; a++) {
+      for (let b = 0; b <= a; b++) {
+        let sum = 0;
+        for (let j = 0; j < this.#size; j++) sum += (this.#residuals[a + 1]![j]! - this.#residuals[a]![j]!) * (this.#residuals[b + 1]![j]! - this.#residuals[b]![j]!);
+        matrix[a * last + b] = sum;
+        matrix[b * last + a] = sum;
+      }
+      let sum = 0;
+      for (let j = 0; j < this.#size; j++) sum += (this.#residuals[a + 1]![j]! - this.#residuals[a]![j]!) * residual[j]!;
+      right[a] = sum;
+      matrix[a * last + a] = matrix[a * last + a]! * (1 + 1e-12);
+    }
+    if (!solveGeneral(matrix, right, last)) return false;
+    const step = new Float64Array(this.#size);
+    for (let j = 0; j < this.#size; j++) {
+      let value = residual[j]!;
+      for (let a = 0; a < last; a++) {
+        value -= right[a]! * (this.#points[a + 1]![j]! - this.#points[a]![j]! + this.#residuals[a + 1]![j]! - this.#residuals[a]![j]!);
+      }
+      if (!Number.isFinite(value) || Math.abs(value) > LARGEST_STEP) return false;
+      step[j] = value;
+    }
+    for (let j = 0; j < this.#size; j++) x[j] = x[j]! + step[j]!;
+    return true;
+  }
+}

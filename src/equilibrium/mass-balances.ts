@@ -1,0 +1,311 @@
+import { exp, LN10, log } from '../quantities/reproducible-math.js';
+import type { ChemicalSystem } from './chemical-system.js';
+import { solveScaled } from './linear-algebra.js';
+
+/** Largest Newton step in a natural logarithm. */
+const LARGEST_STEP = 6;
+const MOST_STEPS = 200;
+const GRADIENT_TOLERANCE = 1e-13;
+const STEP_TOLERANCE = 1e-14;
+/** Steps of the bisection that finds the starting pH, between the limits below. */
+const ESTIMATE_STEPS = 14;
+const LOWEST_PH = -3;
+const HIGHEST_PH = 18;
+/** In place of a component's column: a species of none (H⁺, OH⁻, those held), and one of several. */
+const NONE = -2;
+const MIXED = -1;
+
+/**
+ * All balances at fixed activity coefficients, as one convex problem.
+ *
+ * With ξ = (ln a of every component, ln a(H⁺)) and mj = exp(cj + nj·ξ), the balances Σ nj mj = t are the condition
+ * ∇F = 0 of F(ξ) = Σ mj − t·ξ. F is convex (its Hessian is Σ mj nj njᵀ), strictly so because H⁺ and every bare
+ * component are species, and it grows in every direction because OH⁻ has a negative proton number. Eliminating all but
+ * the last unknown leaves a monotone function of pH, the charge balance.
+ *
+ * The proton numbers are taken relative to the mean protonation of each component at the estimated pH. That changes
+ * nothing in exact arithmetic, and keeps the weak acid in a strong background from being lost to rounding.
+ */
+export class MassBalances {
+  /** mol/kg, of the last point visited. */
+  readonly molality: Float64Array;
+  readonly #system: ChemicalSystem;
+  readonly #free: number[] = [];
+  readonly #size: number;
+  /** Row-major species × unknowns; the last unknown is the proton. */
+  readonly #numbers: Float64Array;
+  readonly #protons: Float64Array;
+  readonly #constants: Float64Array;
+  readonly #totals: Float64Array;
+  readonly #unknowns: Float64Array;
+  readonly #shift: Float64Array;
+  readonly #exponents: Float64Array;
+  readonly #lnTotals: Float64Array;
+  /** Column of the only component in each species. */
+  readonly #only: Int32Array;
+  /** Molality of the species that take part in no reaction, 0 for all others. */
+  readonly #fixed: Float64Array;
+  readonly #gradient: Float64Array;
+  readonly #magnitude: Float64Array;
+  readonly #hessian: Float64Array;
+  readonly #step: Float64Array;
+  readonly #trial: Float64Array;
+  readonly #scale: Float64Array;
+
+  constructor(system: ChemicalSystem) {
+    const count = system.species.length;
+    this.#system = system;
+    const column = new Int32Array(system.components.length).fill(-1);
+    system.components.forEach((component, index) => {
+      if (component.lnActivity === undefined) column[index] = this.#free.push(index) - 1;
+    });
+    const size = this.#free.length + 1;
+    this.#size = size;
+    this.#numbers = new Float64Array(count * size);
+    this.#protons = new Float64Array(count);
+    this.#fixed = new Float64Array(count);
+    this.#constants = new Float64Array(count);
+    for (let j = 0; j < count; j++) {
+      const species = system.species[j]!;
+      this.#fixed[j] = species.fixedMolality ?? 0;
+      if (this.#fixed[j]! > 0) continue;
+      let constant = species.lnBeta;
+      for (const [component, number] of species.stoichiometry) {
+        if (column[component]! >= 0) this.#numbers[j * size + column[component]!] = number;
+        else constant += number * system.components[component]!.lnActivity!;
+      }
+      this.#constants[j] = constant;
+      this.#protons[j] = species.protons;
+    }
+    this.#only = new Int32Array(count);
+    for (let j = 0; j < count; j++) {
+      const own = system.species[j]!.stoichiometry.filter(([component]) => column[component]! >= 0);
+      this.#only[j] = own.length === 0 ? NONE : own.length === 1 ? column[own[0]![0]]! : MIXED;
+    }
+    this.#totals = new Float64Array(size);
+    this.#lnTotals = new Float64Array(size);
+    this.#free.forEach((component, i) => {
+      this.#totals[i] = system.components[component]!.total;
+      this.#lnTotals[i] = log(this.#totals[i]!);
+    });
+    this.#unknowns = new Float64Array(size);
+    this.#shift = new Float64Array(size);
+    this.#exponents = new Float64Array(count);
+    this.molality = new Float64Array(count);
+    this.#gradient = new Float64Array(size);
+    this.#magnitude = new Float64Array(size);
+    this.#hessian = new Float64Array(size * size);
+    this.#step = new Float64Array(size);
+    this.#trial = new Float64Array(size);
+    this.#scale = new Float64Array(size);
+  }
+
+  get lnProtonActivity(): number {
+    return this.#unknowns[this.#size - 1]!;
+  }
+
+  /** ln a of every component of the system, those held from outside included. */
+  componentActivities(): Float64Array {
+    const activities = new Float64Array(this.#system.components.length);
+    this.#system.components.forEach((component, index) => (activities[index] = component.lnActivity ?? 0));
+    this.#free.forEach((component, i) => (activities[component] = this.#unknowns[i]! - this.#shift[i]! * this.lnProtonActivity));
+    return activities;
+  }
+
+  /**
+   * Starting point: every component by itself, at the pH where the proton balance of that simpler mixture holds. Also
+   * sets the reference protonation.
+   */
+  estimate(lnGamma: Float64Array): void {
+    this.#setShift(null);
+    this.#setExponents(lnGamma);
+    let low = LOWEST_PH;
+    let high = HIGHEST_PH;
+    for (let step = 0; step < ESTIMATE_STEPS; step++) {
+      const middle = (low + high) / 2;
+      // More protons bound than there are: the real pH is higher.
+      if (this.#simpleProtonBalance(-middle * LN10) > this.#system.protonTotal) low = middle;
+      else high = middle;
+    }
+    const y = (-(low + high) / 2) * LN10;
+    this.#simpleProtonBalance(y);
+    const last = this.#size - 1;
+    const mean = new Float64Array(this.#size);
+    for (let i = 0; i < last; i++) {
+      let bound = 0;
+      let total = 0;
+      for (let j = 0; j < this.molality.length; j++) {
+        const number = this.#numbers[j * this.#size + i]!;
+        if (number === 0) continue;
+        bound += this.molality[j]! * this.#protons[j]!;
+        total += this.molality[j]! * number;
+      }
+      mean[i] = total > 0 ? bound / total : 0;
+    }
+    for (let i = 0; i < last; i++) this.#unknowns[i] = this.#unknowns[i]! + mean[i]! * y;
+    this.#unknowns[last] = y;
+    this.#setShift(mean);
+    this.#setExponents(lnGamma);
+    this.#evaluate(this.#unknowns);
+  }
+
+  /**
+   * Newton's method on F from the present point, with the step cut so that F falls: a step is shortened while the
+   * slope along it has turned to more than half its first value upwards, which for a convex function bounds F.
+   * @param tolerance relative residual of the balances at which to stop, at least 1e-13.
+   */
+  minimise(lnGamma: Float64Array, tolerance: number): void {
+    this.#setExponents(lnGamma);
+    const size = this.#size;
+    const enough = Math.max(tolerance, GRADIENT_TOLERANCE);
+    this.#evaluate(this.#unknowns);
+    for (let iteration = 0; iteration < MOST_STEPS; iteration++) {
+      if (this.#largestGradient() < enough) return;
+      this.#setHessian();
+      for (let i = 0; i < size; i++) this.#step[i] = -this.#gradient[i]!;
+      solveScaled(this.#hessian, this.#step, size, this.#scale);
+      let longest = 0;
+      let slope = 0;
+      for (let i = 0; i < size; i++) {
+        longest = Math.max(longest, Math.abs(this.#step[i]!));
+        slope += this.#step[i]! * this.#gradient[i]!;
+      }
+      let length = longest > LARGEST_STEP ? LARGEST_STEP / longest : 1;
+      for (let halving = 0; halving < 60; halving++) {
+        for (let i = 0; i < size; i++) this.#trial[i] = this.#unknowns[i]! + length * this.#step[i]!;
+        this.#evaluate(this.#trial);
+        let slopeThere = 0;
+        for (let i = 0; i < size; i++) slopeThere += this.#step[i]! * this.#gradient[i]!;
+        if (slopeThere <= 0.5 * Math.abs(slope) || longest * length < STEP_TOLERANCE) break;
+        length /= 2;
+      }
+      this.#unknowns.set(this.#trial);
+      if (longest < STEP_TOLERANCE) return;
+    }
+  }
+
+  /** Largest relative residual over the balances as the system states them. */
+  residual(): number {
+    const { components, species, protonTotal } = this.#system;
+    const sums = new Float64Array(components.length);
+    const sizes = new Float64Array(components.length);
+    let protons = -protonTotal;
+    let protonSize = Math.abs(protonTotal);
+    for (let j = 0; j < species.length; j++) {
+      const m = this.molality[j]!;
+      protons += species[j]!.protons * m;
+      protonSize += Math.abs(species[j]!.protons) * m;
+      for (const [component, number] of species[j]!.stoichiometry) {
+        sums[component] = sums[component]! + number * m;
+        sizes[component] = sizes[component]! + number * m;
+      }
+    }
+    let worst = Math.abs(protons) / protonSize;
+    for (const component of this.#free) {
+      const total = components[component]!.total;
+      worst = Math.max(worst, Math.abs(sums[component]! - total) / (sizes[component]! + total));
+    }
+    return worst;
+  }
+
+  #setShift(mean: Float64Array | null): void {
+    const last = this.#size - 1;
+    let total = this.#system.protonTotal;
+    for (let i = 0; i < last; i++) {
+      this.#shift[i] = mean ? mean[i]! : 0;
+      total -= this.#shift[i]! * this.#system.components[this.#free[i]!]!.total;
+    }
+    for (let j = 0; j < this.molality.length; j++) {
+      let number = this.#protons[j]!;
+      for (let i = 0; i < last; i++) number -= this.#numbers[j * this.#size + i]! * this.#shift[i]!;
+      this.#numbers[j * this.#size + last] = number;
+    }
+    this.#totals[last] = total;
+  }
+
+  #setExponents(lnGamma: Float64Array): void {
+    const lnWater = lnGamma[this.molality.length]!;
+    for (let j = 0; j < this.molality.length; j++) {
+      this.#exponents[j] = this.#constants[j]! - lnGamma[j]! + this.#system.species[j]!.water * lnWater;
+    }
+  }
+
+  /**
+   * Proton balance at one pH with every component by itself; leaves molalities and unknowns. Mononuclear species share
+   * a component in closed form; a polynuclear one then bounds the activity so that it alone does not exceed the total.
+   */
+  #simpleProtonBalance(y: number): number {
+    const last = this.#size - 1;
+    const count = this.molality.length;
+    const largest = this.#gradient.fill(-Infinity);
+    const bound = this.#step.fill(Infinity);
+    for (let j = 0; j < count; j++) {
+      const i = this.#only[j]!;
+      if (i < 0) continue;
+      const number = this.#numbers[j * this.#size + i]!;
+      const exponent = this.#exponents[j]! + this.#protons[j]! * y;
+      if (number === 1) largest[i] = Math.max(largest[i]!, exponent);
+      else bound[i] = Math.min(bound[i]!, (this.#lnTotals[i]! - log(number) - exponent) / number);
+    }
+    const sums = this.#magnitude.fill(0);
+    for (let j = 0; j < count; j++) {
+      const i = this.#only[j]!;
+      if (i >= 0 && this.#numbers[j * this.#size + i] === 1) sums[i] = sums[i]! + exp(this.#exponents[j]! + this.#protons[j]! * y - largest[i]!);
+    }
+    for (let i = 0; i < last; i++) this.#unknowns[i] = Math.min(this.#lnTotals[i]! - log(sums[i]!) - largest[i]!, bound[i]!);
+    let balance = 0;
+    for (let j = 0; j < count; j++) {
+      const i = this.#only[j]!;
+      this.molality[j] = this.#fixed[j]!;
+      if (i === MIXED || this.#fixed[j]! > 0) continue;
+      const number = i >= 0 ? this.#numbers[j * this.#size + i]! : 0;
+      this.molality[j] = exp(this.#exponents[j]! + this.#protons[j]! * y + (i >= 0 ? number * this.#unknowns[i]! : 0));
+      balance += this.#protons[j]! * this.molality[j]!;
+    }
+    return balance;
+  }
+
+  /** Molalities, gradient and sum of the terms' sizes at a point. */
+  #evaluate(point: Float64Array): void {
+    const size = this.#size;
+    this.#gradient.fill(0);
+    this.#magnitude.fill(0);
+    for (let j = 0; j < this.molality.length; j++) {
+      if (this.#fixed[j]! > 0) continue;
+      let exponent = this.#exponents[j]!;
+      const row = j * size;
+      for (let i = 0; i < size; i++) exponent += this.#numbers[row + i]! * point[i]!;
+      const m = exp(exponent > 700 ? 700 : exponent);
+      this.molality[j] = m;
+      for (let i = 0; i < size; i++) {
+        const term = this.#numbers[row + i]! * m;
+        this.#gradient[i] = this.#gradient[i]! + term;
+        this.#magnitude[i] = this.#magnitude[i]! + Math.abs(term);
+      }
+    }
+    for (let i = 0; i < size; i++) {
+      this.#gradient[i] = this.#gradient[i]! - this.#totals[i]!;
+      this.#magnitude[i] = this.#magnitude[i]! + Math.abs(this.#totals[i]!);
+    }
+  }
+
+  #largestGradient(): number {
+    let largest = 0;
+    for (let i = 0; i < this.#size; i++) largest = Math.max(largest, Math.abs(this.#gradient[i]!) / this.#magnitude[i]!);
+    return largest;
+  }
+
+  #setHessian(): void {
+    const size = this.#size;
+    this.#hessian.fill(0);
+    for (let j = 0; j < this.molality.length; j++) {
+      const row = j * size;
+      const m = this.molality[j]!;
+      for (let a = 0; a < size; a++) {
+        const weight = m * this.#numbers[row + a]!;
+        if (weight === 0) continue;
+        for (let b = 0; b <= a; b++) this.#hessian[a * size + b] = this.#hessian[a * size + b]! + weight * this.#numbers[row + b]!;
+      }
+    }
+  }
+}

@@ -1,0 +1,157 @@
+import data from '../../data/cautions.json';
+import conventions from '../../data/conventions.json';
+import { IONIC_STRENGTH_LIMIT } from '../equilibrium/interaction-coefficients.js';
+import { citationOf } from './constants-used.js';
+import type { Dissolved } from './dissolve.js';
+import { formatChemical } from './plain-text.js';
+import type { Caution, Conditions } from './prediction.js';
+import type { SolvedSolution } from './predict.js';
+import { chemicalOf } from './solution-model.js';
+
+/** What the cautions are read from. */
+export interface CautionInput {
+  readonly solved: SolvedSolution;
+  readonly dissolved: Dissolved;
+  readonly conditions: Conditions;
+  readonly uncertainty: number;
+  readonly bufferCapacity: number;
+}
+
+const LOCAL_RULES = 'Local rules and licensed practice decide.';
+const COMMON_PRACTICE = data.basis;
+const TEMPERATURE_RANGE = [0, 60] as const;
+const GRAVITIES: readonly Caution['gravity'][] = ['danger', 'warning', 'note'];
+
+/** All cautions of a prediction, gravest first. */
+export function cautionsFor(input: CautionInput): Caution[] {
+  const cautions = [...extremePH(input), ...toxicGases(input), ...ionRemarks(input), ...complexes(input), ...validity(input), ...hardlyBuffered(input)];
+  return cautions.sort((a, b) => GRAVITIES.indexOf(a.gravity) - GRAVITIES.indexOf(b.gravity));
+}
+
+interface Threshold {
+  readonly code: string;
+  readonly atMost?: number;
+  readonly atLeast?: number;
+  readonly gravity: string;
+  readonly rule: string;
+  readonly source: string;
+}
+
+function extremePH({ solved, uncertainty }: CautionInput): Caution[] {
+  const pH = solved.state.pH;
+  return (data.extremePH as readonly Threshold[]).flatMap((threshold) => {
+    const limit = threshold.atMost ?? threshold.atLeast!;
+    const distance = threshold.atMost === undefined ? pH - limit : limit - pH;
+    if (distance < -uncertainty) return [];
+    const reach = distance >= 0 ? `is ${threshold.atMost === undefined ? 'at or above' : 'at or below'} ${limit}` : `may reach ${limit} within its uncertainty`;
+    return [
+      {
+        code: threshold.code,
+        gravity: threshold.gravity as Caution['gravity'],
+        text: `The expected pH ${reach}. ${threshold.gravity === 'danger' ? 'Wear eye protection and gloves. ' : 'As waste it may count as corrosive. '}${LOCAL_RULES}`,
+        basis: `${threshold.rule}; ${citationOf(threshold.source)}`,
+      },
+    ];
+  });
+}
+
+function toxicGases({ solved, dissolved }: CautionInput): Caution[] {
+  const codes = new Set(dissolved.particles.flatMap(({ particle }) => particle.cautions));
+  return data.toxicGases.flatMap(({ code, species, gas }) => {
+    const index = solved.model.species.findIndex(({ chemical }) => chemical.id === species);
+    const meaning = solved.model.species[index];
+    if (index < 0 || !meaning || (!codes.has(code) && solved.model.system.components[meaning.component]!.total === 0)) return [];
+    const molality = solved.state.molality[index]!;
+    const share = molality / solved.model.system.components[meaning.component]!.total;
+    const free = share > conventions.negligibleShare;
+    return [
+      {
+        code,
+        gravity: free ? 'danger' : 'warning',
+        text: `${free ? `At this pH ${scientific(molality)} mol/kg stands as ${formatChemical(meaning.chemical)}, which can leave the solution as` : 'Acid sets free'} ${gas}. Work in a fume hood${free ? '' : ' and keep acids away'}. ${LOCAL_RULES}`,
+        basis: COMMON_PRACTICE,
+      },
+    ];
+  });
+}
+
+function ionRemarks({ dissolved }: CautionInput): Caution[] {
+  const remarks = data.ionRemarks as Readonly<Record<string, string>>;
+  return Object.entries(remarks).flatMap(([code, text]) => {
+    const concerned = dissolved.particles.filter(({ particle }) => particle.cautions.includes(code));
+    if (concerned.length === 0) return [];
+    const ions = concerned.map(({ particle }) => formatChemical(chemicalOf(particle))).join(', ');
+    const safety = code === 'toxic' || code === 'oxidiser';
+    return [{ code, gravity: safety ? 'warning' : 'note', text: `${ions} ${text}${safety ? ` ${LOCAL_RULES}` : ''}`, basis: COMMON_PRACTICE }];
+  });
+}
+
+/** Metal ions together with anything that binds them: complexes are not among the species. */
+function complexes({ solved, dissolved }: CautionInput): Caution[] {
+  const metals = solved.model.components.filter((meaning) => meaning.kind === 'metal' && !data.complexes.hardCations.includes(meaning.metal.ion));
+  const ligands = dissolved.particles.filter(({ particle }) => particle.charge <= 0 && !particle.gives?.metals && !data.complexes.weakLigands.includes(particle.id) && particle.id !== 'OH-');
+  if (metals.length === 0 || ligands.length === 0) return [];
+  const names = metals.map((meaning) => (meaning.kind === 'metal' ? formatChemical({ label: meaning.metal.formula, charge: meaning.metal.charge }) : ''));
+  return [
+    {
+      code: 'complexes-not-included',
+      gravity: 'warning',
+      text: `Complexes of ${names.join(', ')} with ${ligands.map(({ particle }) => formatChemical(chemicalOf(particle))).join(', ')} are not part of this calculation; the real pH can differ by more than the stated uncertainty.`,
+      basis: 'Scope of the model',
+    },
+  ];
+}
+
+function validity({ solved, conditions }: CautionInput): Caution[] {
+  const cautions: Caution[] = [];
+  const { ionicStrength } = solved.state;
+  if (ionicStrength > IONIC_STRENGTH_LIMIT) {
+    cautions.push({
+      code: 'ionic-strength-outside',
+      gravity: 'warning',
+      text: `The ionic strength of ${ionicStrength.toFixed(1)} mol/kg is above ${IONIC_STRENGTH_LIMIT} mol/kg, where the activity model ends. Take the pH as a rough figure.`,
+      basis: 'Published range of the specific interaction coefficients',
+    });
+  }
+  if (conditions.temperature < TEMPERATURE_RANGE[0] || conditions.temperature > TEMPERATURE_RANGE[1]) {
+    cautions.push({
+      code: 'temperature-outside',
+      gravity: 'warning',
+      text: `${conditions.temperature} °C is outside ${TEMPERATURE_RANGE[0]} to ${TEMPERATURE_RANGE[1]} °C, for which the enthalpies are known.`,
+      basis: 'Range of the thermodynamic data',
+    });
+  }
+  const held = solved.model.components.filter((meaning) => meaning.constants.some((constant) => constant.heldAtTemperature));
+  if (held.length > 0) {
+    const names = held.map((meaning) => (meaning.kind === 'family' ? meaning.family.name : meaning.metal.name));
+    cautions.push({
+      code: 'enthalpy-unknown',
+      gravity: 'note',
+      text: `No reaction enthalpy is known for some steps of ${names.join(', ')}; their constants were not moved to ${conditions.temperature} °C and the uncertainty is widened.`,
+      basis: 'Data',
+    });
+  }
+  return cautions;
+}
+
+function hardlyBuffered({ bufferCapacity }: CautionInput): Caution[] {
+  const { bufferCapacity: limit, traceAcid } = conventions.hardlyBuffered;
+  if (bufferCapacity >= limit) return [];
+  const shift = traceAcid / bufferCapacity;
+  return [
+    {
+      code: 'hardly-buffered',
+      gravity: 'note',
+      text: `This solution is hardly buffered: a micromole of acid or base per kilogram moves its pH by about ${shift >= 1 ? 'a whole unit' : shift.toFixed(1)}, so CO₂ of the air or a trace on the glass decides the reading.`,
+      basis: COMMON_PRACTICE,
+    },
+  ];
+}
+
+const SUPERSCRIPT_MINUS = '⁻';
+
+function scientific(value: number): string {
+  const [mantissa, exponent] = value.toExponential(1).split('e') as [string, string];
+  const raised = exponent.replace('+', '').replace('-', SUPERSCRIPT_MINUS).replace(/\d/g, (digit) => '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(digit)]!);
+  return `${mantissa} × 10${raised}`;
+}

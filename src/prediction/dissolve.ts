@@ -1,0 +1,125 @@
+import type { Decimal } from '../quantities/decimal.js';
+import { readAmount } from '../quantities/amount.js';
+import { dilutedWaterContent } from '../quantities/solution-density.js';
+import { problem, quote, SoluteError, type Problem } from '../quantities/solute-error.js';
+import { parseUnit } from '../quantities/units.js';
+import type { Water } from '../equilibrium/water.js';
+import type { ReadSolute } from '../substances/solutes-text.js';
+import type { Remark, UnderstoodSolute } from './prediction.js';
+import { chemicalOf, type DissolvedParticle } from './solution-model.js';
+
+/** All solutes as particles in one kilogram of water. */
+export interface Dissolved {
+  readonly solutes: readonly DissolvedSolute[];
+  /** Every particle once, summed over the solutes. */
+  readonly particles: readonly DissolvedParticle[];
+  readonly understood: readonly UnderstoodSolute[];
+}
+
+export interface DissolvedSolute {
+  readonly read: ReadSolute;
+  /** mol/kg water. */
+  readonly molality: number;
+  /** Standard uncertainty of the molality from the digits typed: half of the last digit, rectangular. */
+  readonly uncertainty: number;
+}
+
+const LARGEST_MOLALITY = 60;
+const SMALLEST_MOLALITY = 1e-12;
+
+/**
+ * Turns the amounts into molalities in exact decimal arithmetic, and the substances into particles.
+ * @throws SoluteError for an ion without a sound constant, an amount outside what water can hold, or a mass without volume.
+ */
+export function dissolve(solutes: readonly ReadSolute[], water: Water, volume: string | undefined): Dissolved {
+  const waterPerLitre = dilutedWaterContent({ temperature: water.temperature, waterDensity: water.density });
+  const litres = volume === undefined ? undefined : readVolume(volume);
+  const problems: Problem[] = [];
+  const dissolved: DissolvedSolute[] = [];
+  const understood: UnderstoodSolute[] = [];
+  solutes.forEach((read, index) => {
+    const where = { range: read.range, solute: index };
+    for (const { particle } of read.substance.parts) {
+      if (particle.refused !== undefined) {
+        problems.push(problem('ion-without-constant', `${quote(read.typed)} contains ${particle.names[0] ?? particle.formula}, for which no prediction is made: ${particle.refused}`, read.typed, where));
+      }
+    }
+    const perLitre = molesPerLitre(read, litres);
+    if (perLitre === undefined) {
+      problems.push(
+        problem('missing-amount', `${quote(read.typed)} states how much was taken, but not in which volume. State the final volume, or write the amount per litre.`, read.typed, {
+          ...where,
+          suggestions: [{ value: 'volume="1 L"', reason: 'final volume' }],
+        }),
+      );
+      return;
+    }
+    const exact = read.amount.kind === 'molality' ? read.amount.value : perLitre.div(waterPerLitre);
+    const molality = exact.toNumber();
+    if (!(molality >= SMALLEST_MOLALITY && molality <= LARGEST_MOLALITY)) {
+      const limit = molality > LARGEST_MOLALITY ? `more than ${LARGEST_MOLALITY} mol in a kilogram of water, which no salt reaches` : 'less than a picomole in a kilogram of water';
+      problems.push(problem('amount-out-of-range', `${quote(`${read.amount.number} ${read.amount.unit}`)} of ${read.substance.formula} is ${limit}. Check the number and the unit.`, read.typed, where));
+      return;
+    }
+    const relative = read.amount.halfDigit.div(read.amount.value).toNumber() / Math.sqrt(3);
+    dissolved.push({ read, molality, uncertainty: molality * relative });
+    const molarity = read.amount.kind === 'molality' ? read.amount.value.times(waterPerLitre) : perLitre;
+    understood.push(understand(read, molarity.toNumber(), molality));
+  });
+  if (problems.length > 0) throw new SoluteError(problems);
+  return { solutes: dissolved, particles: sumParticles(dissolved), understood };
+}
+
+/** mol per litre of solution; undefined when the volume is missing. For molalities the value is not used. */
+function molesPerLitre(read: ReadSolute, litres: Decimal | undefined): Decimal | undefined {
+  const { kind, value } = read.amount;
+  const moles = kind === 'mass' || kind === 'mass-concentration' ? value.div(read.substance.molarMass) : value;
+  if (kind !== 'mass' && kind !== 'amount') return moles;
+  return litres && moles.div(litres);
+}
+
+function readVolume(volume: string): Decimal {
+  const match = /^\s*([\d.,eE+-]+)\s*(\S+)\s*$/.exec(volume);
+  const unit = match && parseUnit(match[2]!);
+  const number = match && readAmount(match[1]!, 'mol');
+  if (!unit || !number || 'failure' in number || unit.dimension.length !== 3 || unit.dimension.amount !== 0 || unit.dimension.mass !== 0 || !number.value.gt(0)) {
+    throw new SoluteError([
+      problem('unit-unknown', `The volume ${quote(volume)} is not a number with a unit of volume. Write for example 500 mL or 1 L.`, volume, { suggestions: [{ value: '1 L', reason: 'volume' }] }),
+    ]);
+  }
+  return number.value.times(unit.factor).times(1000);
+}
+
+function sumParticles(solutes: readonly DissolvedSolute[]): DissolvedParticle[] {
+  const sums = new Map<string, DissolvedParticle>();
+  for (const { read, molality } of solutes) {
+    for (const { particle, count } of read.substance.parts) {
+      const before = sums.get(particle.id)?.molality ?? 0;
+      sums.set(particle.id, { particle, molality: before + count * molality });
+    }
+  }
+  return [...sums.values()];
+}
+
+function understand(read: ReadSolute, molarity: number, molality: number): UnderstoodSolute {
+  const { substance, amount } = read;
+  const assumptions: Remark[] = [];
+  if (substance.assumed.includes('hydrate-anhydrous')) assumptions.push({ code: 'hydrate-anhydrous', text: `Taken as anhydrous; hydrates of ${substance.name ?? substance.formula} exist.` });
+  if (amount.decimalComma) assumptions.push({ code: 'decimal-comma', text: `${amount.number} was read with a decimal comma.` });
+  if (amount.kind === 'molality') assumptions.push({ code: 'per-kilogram-water', text: 'mol/kg is taken per kilogram of water.' });
+  else assumptions.push({ code: 'density-of-water', text: 'One litre of solution is taken to hold as much water as one litre of water.' });
+  return {
+    typed: read.typed,
+    ...(read.range ? { range: read.range } : {}),
+    formula: substance.formula,
+    ...(substance.name === undefined ? {} : { name: substance.name }),
+    ...(substance.cas === undefined ? {} : { cas: substance.cas }),
+    molarMass: substance.molarMass,
+    amount: `${amount.number} ${amount.unit}`,
+    molarity,
+    molality,
+    ions: substance.parts.map(({ particle, count }) => ({ chemical: chemicalOf(particle), count })),
+    assumptions,
+  };
+}
+

@@ -1,0 +1,115 @@
+import { ROOM_AIR_CARBON_DIOXIDE } from '../equilibrium/air.js';
+import { interactionTable } from '../equilibrium/interaction-coefficients.js';
+import { solveEquilibrium, type EquilibriumState } from '../equilibrium/solver.js';
+import { waterAt, type Water } from '../equilibrium/water.js';
+import type { InteractionTable } from '../equilibrium/chemical-system.js';
+import { exp } from '../quantities/reproducible-math.js';
+import { readTemperature } from '../quantities/read-temperature.js';
+import { problem, SoluteError } from '../quantities/solute-error.js';
+import { readSolutes, type SoluteInput } from '../substances/solutes-text.js';
+import { cautionsFor } from './cautions.js';
+import { classify } from './classification.js';
+import { constantsUsed } from './constants-used.js';
+import { dissolve, type Dissolved } from './dissolve.js';
+import { dissolutionEquations, hydrolysisEquations } from './equations.js';
+import type { Conditions, Prediction } from './prediction.js';
+import { protonAccounts } from './proton-accounts.js';
+import { reasonFor } from './reason.js';
+import { solutionModel, type SolutionModel } from './solution-model.js';
+import { dominantChemicals, speciesTable, spectatorsOf } from './species-table.js';
+import { uncertaintyOf } from './uncertainty.js';
+
+export type { SoluteInput } from '../substances/solutes-text.js';
+
+/** Conditions as a page states them; all may be left out. */
+export interface PredictionInput extends Partial<Omit<Conditions, 'temperature'>> {
+  /** Celsius, or a text such as "37 °C". Default 25. */
+  readonly temperature?: number | string;
+  /** Final volume, for amounts that are masses or moles: "500 mL". */
+  readonly volume?: string;
+}
+
+/** A solved solution with all that was needed to solve it. */
+export interface SolvedSolution {
+  readonly model: SolutionModel;
+  readonly table: InteractionTable;
+  readonly state: EquilibriumState;
+}
+
+/**
+ * The pH to expect of an aqueous solution, with what it rests on.
+ * @param solutes what is dissolved, as text ("0.10 mol/L NH4Cl; 2.5 g/L Na2HPO4·12H2O"), JSON or an array.
+ * @throws SoluteError when anything of it can't be understood or computed; nothing else is thrown for any input.
+ */
+export function predict(solutes: string | readonly SoluteInput[], input: PredictionInput = {}): Prediction {
+  const conditions = readConditions(input);
+  const water = waterAt(conditions.temperature);
+  const dissolved = dissolve(readSolutes(solutes), water, input.volume);
+  const without = solve(dissolved, water, undefined);
+  const withAir = solve(dissolved, water, conditions.carbonDioxide);
+  const solved = conditions.air === 'equilibrated' ? withAir : without;
+  const neutralPH = water.pKw / 2;
+  const accounts = protonAccounts(dissolved.particles, solved);
+  const uncertainty = uncertaintyOf(solved, dissolved);
+  const pH = solved.state.pH;
+  const { classification, decided } = classify(pH, neutralPH, uncertainty.standard);
+  const constants = constantsUsed(solved, water);
+  const reason = reasonFor(classification, accounts, solved, neutralPH);
+  return {
+    pH,
+    uncertainty: uncertainty.standard,
+    uncertaintyBudget: uncertainty.budget,
+    neutralPH,
+    classification,
+    decided,
+    ionicStrength: solved.state.ionicStrength,
+    waterActivity: exp(solved.state.lnWaterActivity),
+    bufferCapacity: uncertainty.bufferCapacity,
+    inAir: withAir.state.pH,
+    withoutAir: without.state.pH,
+    conditions,
+    understood: dissolved.understood,
+    dissociation: dissolutionEquations(dissolved),
+    hydrolysis: hydrolysisEquations(dissolved, solved, water, constants, reason),
+    dominant: dominantChemicals(solved),
+    spectators: spectatorsOf(dissolved),
+    species: speciesTable(solved),
+    reason,
+    cautions: cautionsFor({ solved, dissolved, conditions, uncertainty: uncertainty.standard, bufferCapacity: uncertainty.bufferCapacity }),
+    constants,
+    residual: solved.state.residual,
+  };
+}
+
+function solve(dissolved: Dissolved, water: Water, carbonDioxide: number | undefined): SolvedSolution {
+  const model = solutionModel(dissolved.particles, water, carbonDioxide);
+  const table = interactionTable(model.system.species, water.debyeHueckelSlope);
+  const state = solveEquilibrium(model.system, table);
+  if (!state.converged || !Number.isFinite(state.pH)) {
+    throw new SoluteError([
+      problem('not-converged', `The equilibrium of this mixture did not settle to the required accuracy (residual ${state.residual.toExponential(1)}). Check the amounts for a slip of a power of ten.`, ''),
+    ]);
+  }
+  return { model, table, state };
+}
+
+const AIR: readonly string[] = ['excluded', 'equilibrated'];
+
+function readConditions(input: PredictionInput): Conditions {
+  const temperature = readTemperature(input.temperature ?? 25);
+  const air = input.air ?? 'excluded';
+  if (!AIR.includes(air)) {
+    throw new SoluteError([
+      problem('condition-unknown', `Air can be excluded or equilibrated; “${String(air)}” is neither.`, String(air), {
+        suggestions: AIR.map((value) => ({ value, reason: 'known value' })),
+      }),
+    ]);
+  }
+  const carbonDioxide = input.carbonDioxide ?? ROOM_AIR_CARBON_DIOXIDE;
+  if (!(carbonDioxide > 0 && carbonDioxide <= 1)) {
+    throw new SoluteError([
+      problem('condition-unknown', `The CO2 content of the air is a mole fraction above 0 and up to 1, such as ${ROOM_AIR_CARBON_DIOXIDE}; “${String(carbonDioxide)}” is not.`, String(carbonDioxide)),
+    ]);
+  }
+  return { temperature, air, carbonDioxide };
+}

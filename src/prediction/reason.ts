@@ -1,0 +1,116 @@
+import { formatChemical } from './plain-text.js';
+import type { Chemical, Prediction, Reason } from './prediction.js';
+import type { ProtonAccount, ProtonAccounts } from './proton-accounts.js';
+import type { SolvedSolution } from './predict.js';
+import { chemicalOf } from './solution-model.js';
+
+/** Share of the free acid or base that must be unspent for it to decide by itself. */
+const UNSPENT = 0.5;
+/** Two states of one family each of at least this share stand side by side. */
+const SIDE_BY_SIDE = 0.03;
+
+/** One sentence that says what decides the pH. */
+export function reasonFor(classification: Prediction['classification'], accounts: ProtonAccounts, solved: SolvedSolution, neutralPH: number): Reason {
+  const strong = classification === 'neutral' ? undefined : strongReason(accounts, solved);
+  if (strong) return strong;
+  const pair = bufferPair(accounts, solved);
+  if (pair) return pair;
+  const donors = accounts.components.filter((account) => account.particles.length > 0 && account.donated > 0).sort((a, b) => b.donated - a.donated);
+  const acceptors = accounts.components.filter((account) => account.particles.length > 0 && account.accepted > 0).sort((a, b) => b.accepted - a.accepted);
+  if (classification === 'neutral') return neutralReason(donors[0], acceptors[0], solved);
+  const decisive = classification === 'acidic' ? donors[0] : acceptors[0];
+  const other = classification === 'acidic' ? acceptors[0] : donors[0];
+  if (!decisive) return airReason(classification, neutralPH);
+  return oneSided(classification, decisive, other, solved);
+}
+
+function oneSided(classification: 'acidic' | 'basic', decisive: ProtonAccount, other: ProtonAccount | undefined, solved: SolvedSolution): Reason {
+  const chemical = shownAs(decisive);
+  const name = formatChemical(chemical);
+  const acidic = classification === 'acidic';
+  const code = acidic ? 'donor-decides' : 'acceptor-decides';
+  const own = acidic ? 'gives up a proton' : 'takes up a proton';
+  const opposite = acidic ? 'takes one up' : 'gives one up';
+  if (other && other.component === decisive.component) {
+    return { code, chemical, text: `${name} ${own} more readily than it ${opposite}: ${classification}.` };
+  }
+  const against = other ? shownAs(other) : counterIon(solved, chemical.charge);
+  if (!against) return { code, chemical, text: `${name} ${own}${acidic ? ' to water' : ' from water'}: ${classification}.` };
+  return { code, chemical, against, text: `${name} ${own} more readily than ${formatChemical(against)} ${opposite}: ${classification}.` };
+}
+
+function neutralReason(donor: ProtonAccount | undefined, acceptor: ProtonAccount | undefined, solved: SolvedSolution): Reason {
+  const water = solved.state.molality[solved.model.species.findIndex((species) => species.chemical.id === 'OH-')]!;
+  const donorActs = donor !== undefined && donor.donated > water;
+  const acceptorActs = acceptor !== undefined && acceptor.accepted > water;
+  if (donorActs && acceptorActs && donor.component === acceptor.component) {
+    const chemical = shownAs(donor);
+    return { code: 'balance', chemical, text: `${formatChemical(chemical)} gives up a proton about as readily as it takes one up: neutral.` };
+  }
+  if (donorActs && acceptorActs) {
+    const chemical = shownAs(donor);
+    const against = shownAs(acceptor);
+    return { code: 'balance', chemical, against, text: `${formatChemical(chemical)} gives up a proton about as readily as ${formatChemical(against)} takes one up: neutral.` };
+  }
+  return { code: 'nothing-reacts', text: 'No dissolved ion gives up or takes up protons to an extent that counts; water decides: neutral.' };
+}
+
+function airReason(classification: 'acidic' | 'basic', neutralPH: number): Reason {
+  if (classification === 'acidic') return { code: 'donor-decides', text: 'Dissolved CO₂ from the air gives up a proton: acidic.' };
+  return { code: 'balance', text: `The activity of H⁺ lies below that of the neutral point (pH ${neutralPH.toFixed(2)}): basic.` };
+}
+
+/** A strong acid or base of which most is unspent. */
+function strongReason(accounts: ProtonAccounts, solved: SolvedSolution): Reason | undefined {
+  if (accounts.strong === 0) return undefined;
+  const acid = accounts.strong > 0;
+  const free = solved.state.molality[solved.model.species.findIndex((species) => species.chemical.id === (acid ? 'H3O+' : 'OH-'))]!;
+  if (free < UNSPENT * Math.abs(accounts.strong)) return undefined;
+  return acid
+    ? { code: 'strong-acid', chemical: H3O, text: 'The strong acid has given its protons to water completely: acidic.' }
+    : { code: 'strong-base', chemical: chemicalOf(accounts.strongParticles.find(({ particle }) => particle.gives!.protons! < 0)!.particle), text: 'The strong base brings hydroxide that nothing takes up: basic.' };
+}
+
+const H3O: Chemical = { id: 'H3O+', label: 'H3O', charge: 1, name: 'oxonium' };
+
+/** A family put in as two states, or partly neutralised, whose neighbours hold the pH. */
+function bufferPair(accounts: ProtonAccounts, solved: SolvedSolution): Reason | undefined {
+  const total = accounts.components.reduce((sum, account) => sum + account.buffering, 0);
+  const main = [...accounts.components].sort((a, b) => b.buffering - a.buffering)[0];
+  if (!main || main.meaning.kind !== 'family' || main.particles.length === 0 || main.buffering < 0.5 * total) return undefined;
+  if (Number.isInteger(main.initialProtonation) && accounts.strong === 0) return undefined;
+  const states = main.meaning.family.states
+    .map((state, index) => ({ state, molality: solved.state.molality[main.meaning.firstSpecies + index]! }))
+    .sort((a, b) => b.molality - a.molality);
+  const [first, second] = states;
+  if (!first || !second || second.molality < SIDE_BY_SIDE * main.total) return undefined;
+  const { states: all } = main.meaning.family;
+  const acid: Chemical = all.indexOf(first.state) < all.indexOf(second.state) ? first.state : second.state;
+  const base: Chemical = acid === first.state ? second.state : first.state;
+  const step = all.findIndex((state) => state.id === acid.id);
+  const pKa = -main.meaning.constants[step]!.log10K;
+  return { code: 'buffer-pair', chemical: acid, against: base, text: `${formatChemical(acid)} and ${formatChemical(base)} stand side by side and hold the pH near the pKa of ${pKa.toFixed(2)}.` };
+}
+
+/** How the component is named in the sentence: as the particle that brought most of it. */
+export function shownAs(account: ProtonAccount): Chemical {
+  const main = [...account.particles].sort((a, b) => b.molality - a.molality)[0]!.particle;
+  if (account.meaning.kind === 'metal') {
+    const { metal } = account.meaning;
+    return main.charge > 0 && main.id === metal.ion ? { id: metal.ion, label: metal.formula, charge: metal.charge, name: metal.name } : chemicalOf(main);
+  }
+  return chemicalOf(main);
+}
+
+/** The most abundant spectator of the opposite charge. */
+function counterIon(solved: SolvedSolution, charge: number): Chemical | undefined {
+  let best: Chemical | undefined;
+  let most = 0;
+  solved.model.species.forEach((species, j) => {
+    if (species.component !== -1 || species.chemical.id === 'H3O+' || species.chemical.id === 'OH-') return;
+    if (Math.sign(species.chemical.charge) !== -Math.sign(charge) || solved.state.molality[j]! <= most) return;
+    most = solved.state.molality[j]!;
+    best = species.chemical;
+  });
+  return best;
+}

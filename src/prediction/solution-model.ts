@@ -1,0 +1,195 @@
+import { CARBON_DIOXIDE_FAMILY, lnCarbonDioxideActivity } from '../equilibrium/air.js';
+import type { ChemicalSystem, Component, SpeciesDefinition } from '../equilibrium/chemical-system.js';
+import type { Water } from '../equilibrium/water.js';
+import { LN10 } from '../quantities/reproducible-math.js';
+import { compositionOf, type Composition } from '../substances/formula.js';
+import { familyOf, metalOf, particleOf, type AcidBaseFamily, type MetalIon, type Particle } from '../substances/ion-library.js';
+import type { Chemical } from './prediction.js';
+import { acidConstant, hydrolysisConstant, type ConstantHere } from './thermodynamic-constants.js';
+
+/** A particle put into the solution, from one or more solutes. */
+export interface DissolvedParticle {
+  readonly particle: Particle;
+  /** mol/kg water. */
+  readonly molality: number;
+}
+
+/** What a species of the solver is in chemistry. */
+export interface SpeciesMeaning {
+  readonly chemical: Chemical;
+  /** Index of the component; −1 for H⁺, OH⁻ and spectators. */
+  readonly component: number;
+  /** Units of the component per species. */
+  readonly units: number;
+  /** Protons relative to the fully deprotonated family or the bare metal ion, per species. */
+  readonly protons: number;
+}
+
+/** A component and where its constants come from. */
+export type ComponentMeaning =
+  | { readonly kind: 'family'; readonly family: AcidBaseFamily; readonly constants: readonly ConstantHere[]; readonly firstSpecies: number }
+  | { readonly kind: 'metal'; readonly metal: MetalIon; readonly constants: readonly ConstantHere[]; readonly firstSpecies: number };
+
+/** The solution as the solver sees it, with the way back to chemistry. */
+export interface SolutionModel {
+  readonly system: ChemicalSystem;
+  readonly species: readonly SpeciesMeaning[];
+  readonly components: readonly ComponentMeaning[];
+}
+
+export const PROTON: Chemical = { id: 'H3O+', label: 'H3O', charge: 1, name: 'oxonium' };
+export const HYDROXIDE: Chemical = { id: 'OH-', label: 'OH', charge: -1, name: 'hydroxide' };
+export const WATER: Chemical = { id: 'H2O', label: 'H2O', charge: 0, name: 'water' };
+
+/** The chemical to show for a particle. */
+export function chemicalOf(particle: Particle): Chemical {
+  return { id: particle.id, label: particle.label, charge: particle.charge, name: particle.names[0] ?? particle.formula };
+}
+
+/**
+ * Adds up what all particles give and writes down every species that can form: the states of each acid–base family,
+ * the hydrolysis species of each metal, the spectators, H⁺ and OH⁻. With the specific interaction model there are no
+ * ion pairs of the alkali metals: their effect is in the coefficients.
+ * @param carbonDioxide mol/mol in dry air, or undefined when air is kept away.
+ */
+export function solutionModel(particles: readonly DissolvedParticle[], water: Water, carbonDioxide: number | undefined): SolutionModel {
+  const families = new Map<string, number>();
+  const metals = new Map<string, number>();
+  const spectators = new Map<string, number>();
+  let protons = 0;
+  const addTo = (totals: Map<string, number>, entries: Readonly<Record<string, number>> | undefined, molality: number): void => {
+    for (const key in entries) totals.set(key, (totals.get(key) ?? 0) + entries[key]! * molality);
+  };
+  for (const { particle, molality } of particles) {
+    if (!particle.gives) {
+      spectators.set(particle.id, (spectators.get(particle.id) ?? 0) + molality);
+      continue;
+    }
+    addTo(families, particle.gives.families, molality);
+    addTo(metals, particle.gives.metals, molality);
+    addTo(spectators, particle.gives.ions, molality);
+    protons += (particle.gives.protons ?? 0) * molality;
+  }
+  const builder = new ModelBuilder(water, protons);
+  for (const [key, total] of metals) builder.addMetal(metalOf(key), total);
+  const air = carbonDioxide === undefined ? undefined : { lnActivity: lnCarbonDioxideActivity(water, carbonDioxide) };
+  if (air && !families.has(CARBON_DIOXIDE_FAMILY)) families.set(CARBON_DIOXIDE_FAMILY, 0);
+  for (const [key, total] of families) builder.addFamily(familyOf(key), total, key === CARBON_DIOXIDE_FAMILY ? air : undefined);
+  for (const [id, total] of spectators) builder.addSpectator(particleOf(id)!, total);
+  return builder.finish();
+}
+
+class ModelBuilder {
+  readonly #water: Water;
+  #protonTotal: number;
+  readonly #components: Component[] = [];
+  readonly #meanings: ComponentMeaning[] = [];
+  readonly #species: SpeciesDefinition[] = [];
+  readonly #speciesMeanings: SpeciesMeaning[] = [];
+
+  constructor(water: Water, protonTotal: number) {
+    this.#water = water;
+    this.#protonTotal = protonTotal;
+  }
+
+  /**
+   * The component is the fully deprotonated state; with its gas held by the air it is the dissolved gas, which is the
+   * most protonated one.
+   */
+  addFamily(family: AcidBaseFamily, total: number, held: { lnActivity: number } | undefined): void {
+    const last = family.states.length - 1;
+    const constants = family.steps.map((_, index) => acidConstant(family, index, this.#water.temperature));
+    const reference = held ? 0 : last;
+    const component = this.#components.push({ id: family.key, total, ...(held ? { lnActivity: held.lnActivity } : {}) }) - 1;
+    this.#meanings.push({ kind: 'family', family, constants, firstSpecies: this.#species.length });
+    this.#protonTotal -= total * (last - reference);
+    let log10Beta = 0;
+    for (let step = 0; step < reference; step++) log10Beta -= constants[step]!.log10K;
+    family.states.forEach((state, index) => {
+      const waters = waterBetween(family, reference, index);
+      this.#add(
+        { id: state.id, charge: state.charge, lnBeta: log10Beta * LN10, protons: reference - index, water: waters, stoichiometry: [[component, 1]] },
+        { chemical: state, component, units: 1, protons: last - index },
+      );
+      if (index < last) log10Beta += constants[index]!.log10K;
+    });
+  }
+
+  addMetal(metal: MetalIon, total: number): void {
+    const hydrolysis = metal.hydrolysis.filter((species) => species.use === undefined);
+    const constants = hydrolysis.map((species) => hydrolysisConstant(metal, species, this.#water.temperature));
+    const component = this.#components.push({ id: metal.key, total }) - 1;
+    this.#meanings.push({ kind: 'metal', metal: { ...metal, hydrolysis }, constants, firstSpecies: this.#species.length });
+    this.#add(
+      { id: metal.ion, charge: metal.charge, lnBeta: 0, protons: 0, water: 0, stoichiometry: [[component, 1]] },
+      { chemical: { id: metal.ion, label: metal.formula, charge: metal.charge, name: metal.name }, component, units: 1, protons: 0 },
+    );
+    hydrolysis.forEach((species, index) => {
+      this.#add(
+        {
+          id: species.id,
+          charge: species.charge,
+          lnBeta: constants[index]!.log10K * LN10,
+          protons: -species.hydroxide,
+          water: species.hydroxide,
+          stoichiometry: [[component, species.metal]],
+        },
+        {
+          chemical: { id: species.id, label: species.label, charge: species.charge, name: hydroxoName(metal, species.metal, species.hydroxide) },
+          component,
+          units: species.metal,
+          protons: -species.hydroxide,
+        },
+      );
+    });
+  }
+
+  addSpectator(particle: Particle, molality: number): void {
+    this.#add(
+      { id: particle.id, charge: particle.charge, lnBeta: 0, protons: 0, water: 0, stoichiometry: [], fixedMolality: molality },
+      { chemical: chemicalOf(particle), component: -1, units: 0, protons: 0 },
+    );
+  }
+
+  finish(): SolutionModel {
+    this.#add({ id: 'H+', charge: 1, lnBeta: 0, protons: 1, water: 0, stoichiometry: [] }, { chemical: PROTON, component: -1, units: 0, protons: 1 });
+    this.#add(
+      { id: 'OH-', charge: -1, lnBeta: -this.#water.pKw * LN10, protons: -1, water: 1, stoichiometry: [] },
+      { chemical: HYDROXIDE, component: -1, units: 0, protons: -1 },
+    );
+    return {
+      system: { components: this.#components, species: this.#species, protonTotal: this.#protonTotal },
+      species: this.#speciesMeanings,
+      components: this.#meanings,
+    };
+  }
+
+  #add(species: SpeciesDefinition, meaning: SpeciesMeaning): void {
+    this.#species.push(species);
+    this.#speciesMeanings.push(meaning);
+  }
+}
+
+const COMPOSITIONS = new Map<string, Composition>();
+function elementCount(formula: string, element: string): number {
+  let composition = COMPOSITIONS.get(formula);
+  if (!composition) {
+    composition = compositionOf(formula);
+    COMPOSITIONS.set(formula, composition);
+  }
+  return composition.get(element) ?? 0;
+}
+
+/** Water molecules taken up from one state of a family to another, from the oxygen in their formulas. */
+export function waterBetween(family: AcidBaseFamily, from: number, to: number): number {
+  return elementCount(family.states[to]!.formula, 'O') - elementCount(family.states[from]!.formula, 'O');
+}
+
+function hydroxoName(metal: MetalIon, metals: number, hydroxides: number): string {
+  return `${numeral(hydroxides)}hydroxido${metals === 1 ? '' : numeral(metals)}${metal.name}`;
+}
+
+function numeral(count: number): string {
+  const words = ['', '', 'di', 'tri', 'tetra', 'penta', 'hexa', 'hepta', 'octa', 'nona', 'deca'];
+  return words[count] ?? `${count}-`;
+}

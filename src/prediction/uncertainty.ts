@@ -1,0 +1,118 @@
+import conventions from '../../data/conventions.json';
+import { coefficientUncertainty } from '../equilibrium/interaction-coefficients.js';
+import { sensitivities, type Sensitivities } from '../equilibrium/sensitivity.js';
+import { LN10 } from '../quantities/reproducible-math.js';
+import type { Dissolved, DissolvedSolute } from './dissolve.js';
+import { formatChemical } from './plain-text.js';
+import type { UncertaintyContribution } from './prediction.js';
+import type { SolvedSolution } from './predict.js';
+import type { ComponentMeaning } from './solution-model.js';
+
+export interface UncertaintyResult {
+  /** Standard uncertainty of pH. */
+  readonly standard: number;
+  readonly budget: UncertaintyContribution[];
+  /** mol/kg per pH unit. */
+  readonly bufferCapacity: number;
+}
+
+type Line = Omit<UncertaintyContribution, 'share'>;
+
+/** Lines below this share of the variance are left out of the budget. */
+const SMALLEST_SHARE = 1e-4;
+const SCALE = conventions.scaleConvention;
+
+/**
+ * Combined standard uncertainty of pH after the Guide to the Expression of Uncertainty in Measurement (JCGM 100:2008,
+ * eq. 10), with the exact sensitivities of the solved balances: constants, amounts as typed, interaction coefficients,
+ * the convention of the pH scale, and the density taken for the solution.
+ */
+export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved): UncertaintyResult {
+  const slopes = sensitivities(solved.model.system, solved.table, solved.state);
+  if (!slopes) return { standard: Infinity, budget: [], bufferCapacity: 0 };
+  const lines: Line[] = [
+    ...solved.model.components.flatMap((meaning) => constantLines(meaning, slopes)),
+    ...dissolved.solutes.map((solute) => amountLine(solute, solved, slopes)),
+    ...modelLines(solved, dissolved, slopes),
+  ];
+  const variance = lines.reduce((sum, line) => sum + line.contribution * line.contribution, 0);
+  const budget = lines
+    .map((line) => ({ ...line, share: variance > 0 ? (line.contribution * line.contribution) / variance : 0 }))
+    .filter((line) => line.share >= SMALLEST_SHARE)
+    .sort((a, b) => b.share - a.share);
+  return { standard: Math.sqrt(variance), budget, bufferCapacity: -1 / slopes.toProtonTotal };
+}
+
+function constantLines(meaning: ComponentMeaning, slopes: Sensitivities): Line[] {
+  if (meaning.kind === 'metal') {
+    return meaning.constants.map((constant, index) => ({
+      of: `log10 *β of ${formatChemical(meaning.metal.hydrolysis[index]!)}`,
+      kind: 'constant',
+      contribution: Math.abs(slopes.toLnBeta[meaning.firstSpecies + 1 + index]!) * LN10 * constant.uncertainty,
+      basis: constant.stated ? 'stated' : 'graded',
+    }));
+  }
+  // A change of one step shifts all states on its deprotonated side against the others.
+  let deprotonated = 0;
+  const lines: Line[] = [];
+  for (let step = meaning.constants.length - 1; step >= 0; step--) {
+    deprotonated += slopes.toLnBeta[meaning.firstSpecies + step + 1]!;
+    const constant = meaning.constants[step]!;
+    lines.push({
+      of: `pKa of ${formatChemical(meaning.family.states[step]!)}`,
+      kind: 'constant',
+      contribution: Math.abs(deprotonated) * LN10 * constant.uncertainty,
+      basis: constant.stated ? 'stated' : 'graded',
+    });
+  }
+  return lines;
+}
+
+function amountLine(solute: DissolvedSolute, solved: SolvedSolution, slopes: Sensitivities): Line {
+  return { of: `amount of ${solute.read.substance.formula}`, kind: 'amount', contribution: Math.abs(amountSlope(solute, solved, slopes)) * solute.uncertainty, basis: 'digits' };
+}
+
+/** ∂pH/∂(molality of one solute), kg/mol. */
+function amountSlope(solute: DissolvedSolute, { model }: SolvedSolution, slopes: Sensitivities): number {
+  let slope = 0;
+  for (const { particle, count } of solute.read.substance.parts) {
+    const gives = particle.gives;
+    if (!gives) continue;
+    slope += count * (gives.protons ?? 0) * slopes.toProtonTotal;
+    model.components.forEach((meaning, component) => {
+      const units = (meaning.kind === 'family' ? gives.families?.[meaning.family.key] : gives.metals?.[meaning.metal.key]) ?? 0;
+      if (units === 0) return;
+      const held = model.system.components[component]!.lnActivity !== undefined;
+      // A family held by the air is counted from its most protonated state.
+      const reference = held && meaning.kind === 'family' ? -(meaning.family.states.length - 1) * slopes.toProtonTotal : slopes.toTotal[component]!;
+      slope += count * units * reference;
+    });
+  }
+  return slope;
+}
+
+function modelLines({ model, table, state }: SolvedSolution, dissolved: Dissolved, slopes: Sensitivities): Line[] {
+  const species = model.species.map(({ chemical }, index) => ({ id: model.system.species[index]!.id, charge: chemical.charge }));
+  let pairs = 0;
+  const inside = Math.min(1, table.ceiling / Math.max(state.ionicStrength, 1e-300));
+  for (let a = 0; a < species.length; a++) {
+    if (species[a]!.charge <= 0) continue;
+    for (let b = 0; b < species.length; b++) {
+      if (species[b]!.charge >= 0) continue;
+      const slope = LN10 * inside * (slopes.toLnGamma[a]! * state.molality[b]! + slopes.toLnGamma[b]! * state.molality[a]!);
+      if (Math.abs(slope) < 1e-7) continue;
+      const line = slope * coefficientUncertainty(species[a]!, species[b]!);
+      pairs += line * line;
+    }
+  }
+  const scale = SCALE.uncertainty * Math.sqrt(state.ionicStrength / SCALE.ionicStrength);
+  const perLitre = dissolved.solutes.filter(({ read }) => read.amount.kind !== 'molality');
+  const total = dissolved.solutes.reduce((sum, { molality }) => sum + molality, 0);
+  const relative = (conventions.densityUncertainty.relativePerMolality * total) / Math.sqrt(3);
+  const density = perLitre.reduce((sum, solute) => sum + amountSlope(solute, { model, table, state }, slopes) * solute.molality * relative, 0);
+  return [
+    { of: 'interaction coefficients', kind: 'model', contribution: Math.sqrt(pairs), basis: 'model' },
+    { of: 'convention of the pH scale', kind: 'model', contribution: scale, basis: 'model' },
+    { of: 'density of the solution', kind: 'model', contribution: Math.abs(density), basis: 'model' },
+  ];
+}
