@@ -3,11 +3,15 @@ import { solveGeneral } from './linear-algebra.js';
 const DEPTH = 4;
 /** Largest step of a combination, in the logarithm of an activity coefficient; plain steps are not bounded. */
 const LARGEST_STEP = 5;
+/** Growing residuals after which no more combinations are tried. */
+const MOST_SETBACKS = 10;
+const SHORTEST_STEP = 1e-3;
 
 /**
  * Accelerates a fixed-point iteration x ← g(x) by combining the last few steps (D. G. Anderson, J. ACM 12 (1965) 547;
  * the least-squares form of Walker & Ni, SIAM J. Numer. Anal. 49 (2011) 1715, eq. 2.2).
- * When residuals stop shrinking it falls back on half a plain step, which converges wherever the map contracts on average.
+ * When residuals keep growing it goes over to plain steps of a length that is halved after every setback: an oscillating
+ * map, however steep, is damped by a short enough step.
  */
 export class AndersonAcceleration {
   readonly #size: number;
@@ -15,6 +19,7 @@ export class AndersonAcceleration {
   readonly #residuals: Float64Array[] = [];
   #lastNorm = Infinity;
   #setbacks = 0;
+  #weight = 1;
 
   constructor(size: number) {
     this.#size = size;
@@ -28,7 +33,8 @@ export class AndersonAcceleration {
       residual[j] = image[j]! - x[j]!;
       norm = Math.max(norm, Math.abs(residual[j]!));
     }
-    if (norm > this.#lastNorm) this.#setbacks++;
+    const setback = norm > this.#lastNorm;
+    if (setback) this.#setbacks++;
     this.#lastNorm = norm;
     this.#points.push(x.slice());
     this.#residuals.push(residual);
@@ -36,9 +42,9 @@ export class AndersonAcceleration {
       this.#points.shift();
       this.#residuals.shift();
     }
-    const accelerated = this.#setbacks < 12 && this.#points.length > 1 && this.#combine(x);
-    const weight = this.#setbacks < 3 ? 1 : 0.5;
-    if (!accelerated) for (let j = 0; j < this.#size; j++) x[j] = x[j]! + weight * residual[j]!;
+    if (this.#setbacks < MOST_SETBACKS && this.#points.length > 1 && this.#combine(x)) return;
+    if (this.#setbacks >= MOST_SETBACKS) this.#weight = setback ? Math.max(SHORTEST_STEP, this.#weight / 2) : Math.min(1, this.#weight * 1.1);
+    for (let j = 0; j < this.#size; j++) x[j] = x[j]! + this.#weight * residual[j]!;
   }
 
   #combine(x: Float64Array): boolean {

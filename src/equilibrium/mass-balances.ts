@@ -8,7 +8,7 @@ const MOST_STEPS = 200;
 const GRADIENT_TOLERANCE = 1e-13;
 const STEP_TOLERANCE = 1e-14;
 /** Steps of the bisection that finds the starting pH, between the limits below. */
-const ESTIMATE_STEPS = 14;
+const ESTIMATE_STEPS = 10;
 const LOWEST_PH = -3;
 const HIGHEST_PH = 18;
 /** In place of a component's column: a species of none (H⁺, OH⁻, those held), and one of several. */

@@ -26,7 +26,7 @@ export interface EquilibriumState {
 /** Largest change of ln γ at which it counts as settled; pH is then known to about the same figure. */
 const COEFFICIENT_TOLERANCE = 1e-10;
 /** The balances are solved this much more closely than the coefficients are known. */
-const BALANCE_TOLERANCE = 0.01;
+const BALANCE_TOLERANCE = 1e-7;
 const MOST_ITERATIONS = 300;
 /** Certificate demanded of a converged state. */
 const RESIDUAL_TOLERANCE = 1e-10;
@@ -50,10 +50,7 @@ export function solveEquilibrium(system: ChemicalSystem, table: InteractionTable
     coefficients[count] = start.lnWaterActivity;
   }
   balances.estimate(coefficients);
-  if (!start) {
-    activityCoefficients(table, balances.molality, coefficients);
-    balances.estimate(coefficients);
-  }
+  if (!start) activityCoefficients(table, balances.molality, coefficients);
   const next = new Float64Array(count + 1);
   const acceleration = new AndersonAcceleration(count + 1);
   let ionicStrength = 0;

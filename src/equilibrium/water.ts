@@ -78,17 +78,26 @@ export function debyeHueckelSlope(celsius: number, density: number, permittivity
   return (e * e * e * Math.sqrt(2 * avogadro * density)) / (8 * Math.PI * s * Math.sqrt(s) * LN10);
 }
 
+/** Properties already computed, so that a page of cards at one temperature computes them once. */
+const KNOWN = new Map<number, Water>();
+const MOST_KNOWN = 256;
+
 /** All properties at one temperature. @param celsius 0 to 100; outside the fits of the sources are extrapolated. */
 export function waterAt(celsius: number): Water {
+  const known = KNOWN.get(celsius);
+  if (known) return known;
   const density = waterDensity(celsius);
   const permittivity = waterPermittivity(celsius, density);
-  return {
+  const water: Water = {
     temperature: celsius,
     density,
     permittivity,
     pKw: waterIonProduct(kelvin(celsius), density / 1000),
     debyeHueckelSlope: debyeHueckelSlope(celsius, density, permittivity),
   };
+  if (KNOWN.size >= MOST_KNOWN) KNOWN.clear();
+  KNOWN.set(celsius, water);
+  return water;
 }
 
 /** Molar mass of water, kg/mol. */

@@ -2,7 +2,7 @@ import conventions from '../../data/conventions.json';
 import { exp10 } from '../quantities/reproducible-math.js';
 import type { Water } from '../equilibrium/water.js';
 import { compositionOf } from '../substances/formula.js';
-import { familyOf, metalOf, type AcidBaseFamily } from '../substances/ion-library.js';
+import { familyOf, metalOf, particleOf, type AcidBaseFamily, type FamilyState } from '../substances/ion-library.js';
 import type { Dissolved } from './dissolve.js';
 import type { Chemical, ConstantUsed, Equation, EquationTerm, Reason } from './prediction.js';
 import type { SolvedSolution } from './predict.js';
@@ -14,20 +14,20 @@ const NEGLIGIBLE = conventions.negligibleShare;
 /** How each solute falls apart: "NH₄Cl → NH₄⁺ + Cl⁻". Molecules that stay whole have no such equation. */
 export function dissolutionEquations({ solutes }: Dissolved): Equation[] {
   return solutes.flatMap(({ read }) => {
-    const { parts, formula, name, hydrateWater } = read.substance;
+    const { substance } = read;
+    const { parts, formula } = substance;
     if (parts.length === 1 && parts[0]!.count === 1) return [];
-    const substance: Chemical = { id: formula, label: formula, charge: 0, name: name ?? formula };
-    const protons = parts.reduce((sum, { particle, count }) => sum + (particle.id === 'H+' ? count : 0), 0);
-    const products = parts.map(({ particle, count }) => ({ coefficient: count, chemical: particle.id === 'H+' ? PROTON : ionAsWritten(particle) }));
-    // Water of crystallisation is set free; each free proton takes up one water molecule.
-    const freed = hydrateWater - protons;
+    const written: Chemical = { id: formula, label: formula, charge: 0, name: substance.name ?? formula };
+    // Oxygen counts the water: set free from a hydrate, or taken up by free protons and anhydrides.
+    const products = parts.map(({ particle, count }) => ({ coefficient: count, chemical: particle.id === 'H+' ? PROTON : ionAsWritten(particle), oxygens: particle.id === 'H+' ? 1 : oxygen(particle.formula) }));
+    const freed = (substance.composition.get('O') ?? 0) - products.reduce((sum, { coefficient, oxygens }) => sum + coefficient * oxygens, 0);
     return [
       {
         kind: 'dissolution',
-        reactants: terms([1, substance], [-freed, WATER]),
+        reactants: terms([1, written], [-freed, WATER]),
         products: terms(...products.map(({ coefficient, chemical }) => [coefficient, chemical] as const), [freed, WATER]),
         arrow: 'complete',
-        of: formula,
+        of: substance.formula,
       } satisfies Equation,
     ];
   });
@@ -42,8 +42,8 @@ function ionAsWritten(particle: DissolvedParticle['particle']): Chemical {
 export function hydrolysisEquations(dissolved: Dissolved, solved: SolvedSolution, water: Water, constants: readonly ConstantUsed[], reason: Reason): Equation[] {
   const writer = new EquationWriter(solved, water, constants);
   const equations = dissolved.particles.flatMap(({ particle }) => writer.equationsOf(particle));
-  const kind = reason.code === 'donor-decides' ? ['proton-donation', 'metal-hydrolysis'] : reason.code === 'acceptor-decides' ? ['proton-acceptance'] : [];
-  const decisive = equations.findIndex((equation) => equation.of === reason.chemical?.id && kind.includes(equation.kind));
+  const kinds = reason.code === 'donor-decides' ? ['proton-donation', 'metal-hydrolysis'] : reason.code === 'acceptor-decides' ? ['proton-acceptance'] : [];
+  const decisive = equations.findIndex(({ of, reactants, kind }) => kinds.includes(kind) && (of === reason.chemical?.id || reactants[0]!.chemical.id === reason.chemical?.id));
   const written = equations.map((equation, index) => (index === decisive ? { ...equation, decides: true } : equation));
   return written.length > 0 ? written : [writer.waterEquation()];
 }
@@ -70,37 +70,55 @@ class EquationWriter {
     const families = Object.entries(particle.gives?.families ?? {});
     const metals = Object.entries(particle.gives?.metals ?? {});
     const equations: Equation[] = [];
-    for (const [key, count] of families) {
-      const family = familyOf(key);
-      const protons = families.length === 1 && metals.length === 0 ? (particle.gives!.protons ?? 0) : 0;
-      const last = family.states.length - 1;
-      const index = last - protons / count;
-      const isState = count === 1 && families.length === 1 && metals.length === 0 && family.states[index]?.id === particle.id;
-      if (!isState && families.length === 1 && metals.length === 0) equations.push(...this.#conversion(particle, family, count, protons));
-      const entered = isState ? [index] : [Math.floor(index), Math.ceil(index)].map((state) => Math.max(0, Math.min(last, state)));
-      for (const state of new Set(entered)) equations.push(...this.#familyEquations(family, state, particle.id));
-    }
+    const entered = families.map(([key, count]) => this.#statesEntered(key, count, families.length + metals.length === 1 ? (particle.gives!.protons ?? 0) : 0));
+    const isState = metals.length === 0 && entered.length === 1 && entered[0]!.length === 1 && entered[0]![0]!.state.id === particle.id;
+    const isMetal = families.length === 0 && metals.length === 1 && metalOf(metals[0]![0]).ion === particle.id;
+    if (families.length + metals.length > 0 && !isState && !isMetal) equations.push(this.#conversion(particle, entered.flat()));
+    entered.forEach((states, index) => {
+      for (const { position } of states) equations.push(...this.#familyEquations(familyOf(families[index]![0]), position, particle.id));
+    });
     for (const [key] of metals) equations.push(...this.#metalEquations(key, particle));
     return equations;
   }
 
-  /** A composite ion as it becomes members of its family: "HF₂⁻ → HF + F⁻". */
-  #conversion(particle: DissolvedParticle['particle'], family: AcidBaseFamily, count: number, protons: number): Equation[] {
-    const last = family.states.length - 1;
+  /** The two neighbouring states (or the one) in which units of a family with so many protons in all arrive. */
+  #statesEntered(key: string, count: number, protons: number): EnteredState[] {
+    const { states } = familyOf(key);
+    const last = states.length - 1;
     const bound = Math.max(0, Math.min(count * last, protons));
     const low = Math.floor(bound / count);
     const higher = bound - low * count;
-    const hydroxide = Math.max(0, -protons);
-    const products: (readonly [number, Chemical])[] = [
-      [higher, family.states[last - low - 1] ?? family.states[0]!],
-      [count - higher, family.states[last - low]!],
-      [hydroxide, HYDROXIDE],
-    ];
-    const oxygens = products.reduce((sum, [number, chemical]) => sum + number * oxygen(chemical.label === 'OH' ? 'OH' : (family.states.find((state) => state.id === chemical.id)?.formula ?? 'OH')), 0);
-    const waters = oxygens - oxygen(particle.formula);
     return [
-      { kind: 'dissolution', reactants: terms([1, chemicalOf(particle)], [waters, WATER]), products: terms(...products, [-waters, WATER]), arrow: 'complete', of: particle.id },
+      { position: last - low - 1, number: higher },
+      { position: last - low, number: count - higher },
+    ]
+      .filter(({ number }) => number > 0)
+      .map(({ position, number }) => ({ position, number, state: states[position]! }));
+  }
+
+  /** A composite ion as it becomes what the solver knows: "HF₂⁻ → HF + F⁻", "Sb³⁺ + 4 H₂O → Sb(OH)₂⁺ + 2 H₃O⁺". */
+  #conversion(particle: DissolvedParticle['particle'], entered: readonly EnteredState[]): Equation {
+    const metals = Object.entries(particle.gives!.metals ?? {}).map(([key, count]) => ({ metal: metalOf(key), count }));
+    const hydroxides = metals.length === 1 ? -(particle.gives!.protons ?? 0) / metals[0]!.count : 0;
+    const products: { number: number; chemical: Chemical; formula: string }[] = [
+      ...entered.map(({ state, number }) => ({ number, chemical: state, formula: state.formula })),
+      ...metals.map(({ metal, count }) => {
+        const species = metal.hydrolysis.find((step) => step.metal === 1 && step.hydroxide === hydroxides);
+        const shown = species ?? { id: metal.ion, label: metal.formula, charge: metal.charge, formula: metal.formula };
+        return { number: count, chemical: { id: shown.id, label: shown.label, charge: shown.charge, name: metal.name }, formula: shown.formula };
+      }),
+      ...Object.entries(particle.gives!.ions ?? {}).map(([id, number]) => ({ number, chemical: chemicalOf(particleOf(id)!), formula: particleOf(id)!.formula })),
     ];
+    const charge = particle.charge - products.reduce((sum, { number, chemical }) => sum + number * chemical.charge, 0);
+    if (charge !== 0) products.push({ number: Math.abs(charge), chemical: charge > 0 ? PROTON : HYDROXIDE, formula: 'OH' });
+    const freed = oxygen(particle.formula) - products.reduce((sum, { number, formula }) => sum + number * oxygen(formula), 0);
+    return {
+      kind: 'dissolution',
+      reactants: terms([1, ionAsWritten(particle)], [-freed, WATER]),
+      products: terms(...products.map(({ number, chemical }) => [number, chemical] as const), [freed, WATER]),
+      arrow: 'complete',
+      of: particle.id,
+    };
   }
 
   #familyEquations(family: AcidBaseFamily, state: number, of: string): Equation[] {
@@ -225,10 +243,23 @@ class EquationWriter {
   }
 }
 
+interface EnteredState {
+  readonly position: number;
+  readonly number: number;
+  readonly state: FamilyState;
+}
 type FamilyMeaning = Extract<ComponentMeaning, { kind: 'family' }>;
 
+const OXYGENS = new Map<string, number>();
+
+/** Oxygen atoms of a formula of the data files. */
 function oxygen(formula: string): number {
-  return compositionOf(formula).get('O') ?? 0;
+  let count = OXYGENS.get(formula);
+  if (count === undefined) {
+    count = compositionOf(formula).get('O') ?? 0;
+    OXYGENS.set(formula, count);
+  }
+  return count;
 }
 
 /** Terms with a positive coefficient. */

@@ -54,7 +54,7 @@ export function predict(solutes: string | readonly SoluteInput[], input: Predict
   const pH = solved.state.pH;
   const { classification, decided } = classify(pH, neutralPH, uncertainty.standard);
   const constants = constantsUsed(solved, water);
-  const reason = reasonFor(classification, accounts, solved, neutralPH);
+  const reason = reasonFor(classification, accounts, solved, dissolved);
   return {
     pH,
     uncertainty: uncertainty.standard,

@@ -1,8 +1,9 @@
 import { formatChemical } from './plain-text.js';
 import type { Chemical, Prediction, Reason } from './prediction.js';
 import type { ProtonAccount, ProtonAccounts } from './proton-accounts.js';
+import type { Dissolved } from './dissolve.js';
 import type { SolvedSolution } from './predict.js';
-import { chemicalOf } from './solution-model.js';
+import { chemicalOf, HYDROXIDE, PROTON } from './solution-model.js';
 
 /** Share of the free acid or base that must be unspent for it to decide by itself. */
 const UNSPENT = 0.5;
@@ -10,8 +11,8 @@ const UNSPENT = 0.5;
 const SIDE_BY_SIDE = 0.03;
 
 /** One sentence that says what decides the pH. */
-export function reasonFor(classification: Prediction['classification'], accounts: ProtonAccounts, solved: SolvedSolution, neutralPH: number): Reason {
-  const strong = classification === 'neutral' ? undefined : strongReason(accounts, solved);
+export function reasonFor(classification: Prediction['classification'], accounts: ProtonAccounts, solved: SolvedSolution, dissolved: Dissolved): Reason {
+  const strong = classification === 'neutral' ? undefined : strongReason(accounts, solved, dissolved);
   if (strong) return strong;
   const pair = bufferPair(accounts, solved);
   if (pair) return pair;
@@ -20,7 +21,7 @@ export function reasonFor(classification: Prediction['classification'], accounts
   if (classification === 'neutral') return neutralReason(donors[0], acceptors[0], solved);
   const decisive = classification === 'acidic' ? donors[0] : acceptors[0];
   const other = classification === 'acidic' ? acceptors[0] : donors[0];
-  if (!decisive) return airReason(classification, neutralPH);
+  if (!decisive) return airReason(classification);
   return oneSided(classification, decisive, other, solved);
 }
 
@@ -36,6 +37,8 @@ function oneSided(classification: 'acidic' | 'basic', decisive: ProtonAccount, o
   }
   const against = other ? shownAs(other) : counterIon(solved, chemical.charge);
   if (!against) return { code, chemical, text: `${name} ${own}${acidic ? ' to water' : ' from water'}: ${classification}.` };
+  // A cation takes up no proton, so there is nothing to compare the donor with.
+  if (!other && acidic && against.charge > 0) return { code, chemical, against, text: `${name} ${own} to water, and ${formatChemical(against)} takes no part: acidic.` };
   return { code, chemical, against, text: `${name} ${own} more readily than ${formatChemical(against)} ${opposite}: ${classification}.` };
 }
 
@@ -55,23 +58,27 @@ function neutralReason(donor: ProtonAccount | undefined, acceptor: ProtonAccount
   return { code: 'nothing-reacts', text: 'No dissolved ion gives up or takes up protons to an extent that counts; water decides: neutral.' };
 }
 
-function airReason(classification: 'acidic' | 'basic', neutralPH: number): Reason {
+/** No dissolved ion did it, so it is the gas of the air. */
+function airReason(classification: 'acidic' | 'basic'): Reason {
   if (classification === 'acidic') return { code: 'donor-decides', text: 'Dissolved CO₂ from the air gives up a proton: acidic.' };
-  return { code: 'balance', text: `The activity of H⁺ lies below that of the neutral point (pH ${neutralPH.toFixed(2)}): basic.` };
+  return { code: 'balance', text: 'No dissolved ion decides; the medium shifts the balance of H⁺ and OH⁻: basic.' };
 }
 
 /** A strong acid or base of which most is unspent. */
-function strongReason(accounts: ProtonAccounts, solved: SolvedSolution): Reason | undefined {
+function strongReason(accounts: ProtonAccounts, solved: SolvedSolution, { solutes }: Dissolved): Reason | undefined {
   if (accounts.strong === 0) return undefined;
   const acid = accounts.strong > 0;
-  const free = solved.state.molality[solved.model.species.findIndex((species) => species.chemical.id === (acid ? 'H3O+' : 'OH-'))]!;
+  const chemical = acid ? PROTON : HYDROXIDE;
+  const free = solved.state.molality[solved.model.species.findIndex((species) => species.chemical.id === chemical.id)]!;
   if (free < UNSPENT * Math.abs(accounts.strong)) return undefined;
+  const names = solutes
+    .filter(({ read }) => read.substance.parts.some(({ particle }) => accounts.strongParticles.some((strong) => strong.particle === particle && Math.sign(particle.gives!.protons!) === Math.sign(accounts.strong))))
+    .map(({ read }) => formatChemical({ label: read.substance.formula, charge: 0 }))
+    .join(', ');
   return acid
-    ? { code: 'strong-acid', chemical: H3O, text: 'The strong acid has given its protons to water completely: acidic.' }
-    : { code: 'strong-base', chemical: chemicalOf(accounts.strongParticles.find(({ particle }) => particle.gives!.protons! < 0)!.particle), text: 'The strong base brings hydroxide that nothing takes up: basic.' };
+    ? { code: 'strong-acid', chemical, text: `${names} gives its protons to water completely, and nothing takes them up: acidic.` }
+    : { code: 'strong-base', chemical, text: `${names} sets hydroxide free, and nothing takes it up: basic.` };
 }
-
-const H3O: Chemical = { id: 'H3O+', label: 'H3O', charge: 1, name: 'oxonium' };
 
 /** A family put in as two states, or partly neutralised, whose neighbours hold the pH. */
 function bufferPair(accounts: ProtonAccounts, solved: SolvedSolution): Reason | undefined {
@@ -92,14 +99,16 @@ function bufferPair(accounts: ProtonAccounts, solved: SolvedSolution): Reason | 
   return { code: 'buffer-pair', chemical: acid, against: base, text: `${formatChemical(acid)} and ${formatChemical(base)} stand side by side and hold the pH near the pKa of ${pKa.toFixed(2)}.` };
 }
 
-/** How the component is named in the sentence: as the particle that brought most of it. */
+/** How the component is named in the sentence: as the particle that brought most of it, or what that becomes at once. */
 export function shownAs(account: ProtonAccount): Chemical {
   const main = [...account.particles].sort((a, b) => b.molality - a.molality)[0]!.particle;
   if (account.meaning.kind === 'metal') {
     const { metal } = account.meaning;
-    return main.charge > 0 && main.id === metal.ion ? { id: metal.ion, label: metal.formula, charge: metal.charge, name: metal.name } : chemicalOf(main);
+    return main.id === metal.ion ? { id: metal.ion, label: metal.formula, charge: metal.charge, name: metal.name } : chemicalOf(main);
   }
-  return chemicalOf(main);
+  const { states } = account.meaning.family;
+  if (states.some((state) => state.id === main.id)) return chemicalOf(main);
+  return states[states.length - 1 - Math.round(account.initialProtonation)] ?? chemicalOf(main);
 }
 
 /** The most abundant spectator of the opposite charge. */

@@ -5,7 +5,7 @@ import { LN10 } from '../quantities/reproducible-math.js';
 import { compositionOf, type Composition } from '../substances/formula.js';
 import { familyOf, metalOf, particleOf, type AcidBaseFamily, type MetalIon, type Particle } from '../substances/ion-library.js';
 import type { Chemical } from './prediction.js';
-import { acidConstant, hydrolysisConstant, type ConstantHere } from './thermodynamic-constants.js';
+import { acidConstants, hydrolysisConstants, type ConstantHere } from './thermodynamic-constants.js';
 
 /** A particle put into the solution, from one or more solutes. */
 export interface DissolvedParticle {
@@ -98,7 +98,7 @@ class ModelBuilder {
    */
   addFamily(family: AcidBaseFamily, total: number, held: { lnActivity: number } | undefined): void {
     const last = family.states.length - 1;
-    const constants = family.steps.map((_, index) => acidConstant(family, index, this.#water.temperature));
+    const constants = acidConstants(family, this.#water.temperature);
     const reference = held ? 0 : last;
     const component = this.#components.push({ id: family.key, total, ...(held ? { lnActivity: held.lnActivity } : {}) }) - 1;
     this.#meanings.push({ kind: 'family', family, constants, firstSpecies: this.#species.length });
@@ -109,17 +109,17 @@ class ModelBuilder {
       const waters = waterBetween(family, reference, index);
       this.#add(
         { id: state.id, charge: state.charge, lnBeta: log10Beta * LN10, protons: reference - index, water: waters, stoichiometry: [[component, 1]] },
-        { chemical: state, component, units: 1, protons: last - index },
+        { chemical: { id: state.id, label: state.label, charge: state.charge, name: state.name }, component, units: 1, protons: last - index },
       );
       if (index < last) log10Beta += constants[index]!.log10K;
     });
   }
 
   addMetal(metal: MetalIon, total: number): void {
-    const hydrolysis = metal.hydrolysis.filter((species) => species.use === undefined);
-    const constants = hydrolysis.map((species) => hydrolysisConstant(metal, species, this.#water.temperature));
+    const { hydrolysis } = metal;
+    const constants = hydrolysisConstants(metal, this.#water.temperature);
     const component = this.#components.push({ id: metal.key, total }) - 1;
-    this.#meanings.push({ kind: 'metal', metal: { ...metal, hydrolysis }, constants, firstSpecies: this.#species.length });
+    this.#meanings.push({ kind: 'metal', metal, constants, firstSpecies: this.#species.length });
     this.#add(
       { id: metal.ion, charge: metal.charge, lnBeta: 0, protons: 0, water: 0, stoichiometry: [[component, 1]] },
       { chemical: { id: metal.ion, label: metal.formula, charge: metal.charge, name: metal.name }, component, units: 1, protons: 0 },

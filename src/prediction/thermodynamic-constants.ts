@@ -19,21 +19,44 @@ export interface ConstantHere {
 const GRADES = conventions.gradeUncertainty;
 const PER_KELVIN = conventions.temperatureUncertainty.withoutEnthalpy;
 
-/** log10 Ka of one step of a family. @param index of the step, the most acid first. */
-export function acidConstant(family: AcidBaseFamily, index: number, celsius: number): ConstantHere {
-  const step = family.steps[index]!;
-  const acid = family.states[index]!.charge;
-  const base = family.states[index + 1]!.charge;
-  const log10K = atZeroIonicStrength(-step.pKa, base * base + 1 - acid * acid, step.ionicStrength);
-  return moved(log10K, step.temperature, step.enthalpy, step.heatCapacity, celsius, step.uncertainty, GRADES[step.grade]);
+/** Constants of one family or metal at one temperature, the last asked for. */
+const ACIDS = new WeakMap<AcidBaseFamily, Remembered>();
+const METALS = new WeakMap<MetalIon, Remembered>();
+interface Remembered {
+  readonly celsius: number;
+  readonly constants: readonly ConstantHere[];
 }
 
-/** log10 *β of one hydrolysis species. */
-export function hydrolysisConstant(metal: MetalIon, species: HydrolysisSpecies, celsius: number): ConstantHere {
-  const chargeSquares = species.charge * species.charge + species.hydroxide - species.metal * metal.charge * metal.charge;
-  const log10K = atZeroIonicStrength(species.logK, chargeSquares, species.ionicStrength);
-  const first = species.metal === 1 && species.hydroxide === 1;
-  return moved(log10K, species.temperature, species.enthalpy, undefined, celsius, species.uncertainty, first ? GRADES.firstHydrolysis : GRADES.furtherHydrolysis);
+/** log10 Ka of every step of a family, the most acid first. */
+export function acidConstants(family: AcidBaseFamily, celsius: number): readonly ConstantHere[] {
+  return remembered(ACIDS, family, celsius, () =>
+    family.steps.map((step, index) => {
+      const acid = family.states[index]!.charge;
+      const base = family.states[index + 1]!.charge;
+      const log10K = atZeroIonicStrength(-step.pKa, base * base + 1 - acid * acid, step.ionicStrength);
+      return moved(log10K, step.temperature, step.enthalpy, step.heatCapacity, celsius, step.uncertainty, GRADES[step.grade]);
+    }),
+  );
+}
+
+/** log10 *β of every hydrolysis species of a metal ion. */
+export function hydrolysisConstants(metal: MetalIon, celsius: number): readonly ConstantHere[] {
+  return remembered(METALS, metal, celsius, () =>
+    metal.hydrolysis.map((species) => {
+      const chargeSquares = species.charge * species.charge + species.hydroxide - species.metal * metal.charge * metal.charge;
+      const log10K = atZeroIonicStrength(species.logK, chargeSquares, species.ionicStrength);
+      const first = species.metal === 1 && species.hydroxide === 1;
+      return moved(log10K, species.temperature, species.enthalpy, undefined, celsius, species.uncertainty, first ? GRADES.firstHydrolysis : GRADES.furtherHydrolysis);
+    }),
+  );
+}
+
+function remembered<Key extends object>(store: WeakMap<Key, Remembered>, key: Key, celsius: number, compute: () => ConstantHere[]): readonly ConstantHere[] {
+  const known = store.get(key);
+  if (known?.celsius === celsius) return known.constants;
+  const constants = compute();
+  store.set(key, { celsius, constants });
+  return constants;
 }
 
 function moved(

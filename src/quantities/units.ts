@@ -35,7 +35,18 @@ function atom(factor: string, amount: number, mass: number, length: number): Uni
  * @returns undefined when the text is no such unit.
  */
 export function parseUnit(text: string): Unit | undefined {
-  const plain = plainUnit(text);
+  if (KNOWN.has(text)) return KNOWN.get(text);
+  const unit = readUnit(plainUnit(text));
+  if (KNOWN.size >= MOST_KNOWN) KNOWN.clear();
+  KNOWN.set(text, unit);
+  return unit;
+}
+
+/** Units already read; a page writes the same few again and again. */
+const KNOWN = new Map<string, Unit | undefined>();
+const MOST_KNOWN = 256;
+
+function readUnit(plain: string): Unit | undefined {
   const molar = MOLAR.exec(plain);
   if (molar) {
     const prefix = molar[1] === '' ? '1' : PREFIXES[molar[1]!]!;

@@ -158,19 +158,26 @@ function identifyName(text: string): IdentifiedSubstance | NotIdentified | undef
   };
 }
 
+const IDENTIFIED = new Map<ListedSubstance, IdentifiedSubstance>();
+
 /** @param unhydratedName the text was a name in which nothing says whether water of crystallisation belongs to it. */
 function fromList(substance: ListedSubstance, unhydratedName = false): IdentifiedSubstance {
-  const formula = parseFormula(substance.formula) as Formula;
-  return {
-    formula: substance.formula,
-    name: substance.names[0]!,
-    ...(substance.cas === null ? {} : { cas: substance.cas }),
-    hydrateWater: formula.hydrateWater,
-    composition: formula.composition,
-    molarMass: molarMass(formula.composition),
-    parts: partsOf(substance.parts),
-    assumed: unhydratedName && formula.hydrateWater === 0 && hasHydrates(substance) ? ['hydrate-anhydrous'] : [],
-  };
+  let identified = IDENTIFIED.get(substance);
+  if (!identified) {
+    const formula = parseFormula(substance.formula) as Formula;
+    identified = {
+      formula: substance.formula,
+      name: substance.names[0]!,
+      ...(substance.cas === null ? {} : { cas: substance.cas }),
+      hydrateWater: formula.hydrateWater,
+      composition: formula.composition,
+      molarMass: molarMass(formula.composition),
+      parts: partsOf(substance.parts),
+      assumed: [],
+    };
+    IDENTIFIED.set(substance, identified);
+  }
+  return unhydratedName && identified.hydrateWater === 0 && hasHydrates(substance) ? { ...identified, assumed: ['hydrate-anhydrous'] } : identified;
 }
 
 function hasHydrates(substance: ListedSubstance): boolean {

@@ -120,11 +120,16 @@ function labelled<Row extends Labelled>(row: Row): Row & { readonly label: strin
   return { ...row, label: row.label ?? row.formula };
 }
 
+/** Ion pairs whose effect the interaction coefficients of the activity model already contain are left out. */
+function withInteractionModel(species: HydrolysisSpecies): boolean {
+  return species.use === undefined;
+}
+
 const FAMILIES: ReadonlyMap<string, AcidBaseFamily> = new Map(
   (families.families as unknown as AcidBaseFamily[]).map((family) => [family.key, { ...family, states: family.states.map(labelled) }]),
 );
 const METALS: ReadonlyMap<string, MetalIon> = new Map(
-  (metals.metals as unknown as MetalIon[]).map((metal) => [metal.key, { ...labelled(metal), hydrolysis: metal.hydrolysis.map(labelled) }]),
+  (metals.metals as unknown as MetalIon[]).map((metal) => [metal.key, { ...labelled(metal), hydrolysis: metal.hydrolysis.filter(withInteractionModel).map(labelled) }]),
 );
 
 const PARTICLES = new Map<string, Particle>();
