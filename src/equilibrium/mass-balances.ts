@@ -68,7 +68,7 @@ export class MassBalances {
     for (let j = 0; j < count; j++) {
       const species = system.species[j]!;
       this.#fixed[j] = species.fixedMolality ?? 0;
-      if (this.#fixed[j]! > 0) continue;
+      if (species.fixedMolality !== undefined) continue;
       let constant = species.lnBeta;
       for (const [component, number] of species.stoichiometry) {
         if (column[component]! >= 0) this.#numbers[j * size + column[component]!] = number;
@@ -80,13 +80,15 @@ export class MassBalances {
     this.#only = new Int32Array(count);
     for (let j = 0; j < count; j++) {
       const own = system.species[j]!.stoichiometry.filter(([component]) => column[component]! >= 0);
-      this.#only[j] = own.length === 0 ? NONE : own.length === 1 ? column[own[0]![0]]! : MIXED;
+      const [first] = own;
+      this.#only[j] = first === undefined ? NONE : own.length === 1 ? (column[first[0]] ?? NONE) : MIXED;
     }
     this.#totals = new Float64Array(size);
     this.#lnTotals = new Float64Array(size);
     this.#free.forEach((component, i) => {
-      this.#totals[i] = system.components[component]!.total;
-      this.#lnTotals[i] = log(this.#totals[i]!);
+      const { total } = system.components[component]!;
+      this.#totals[i] = total;
+      this.#lnTotals[i] = log(total);
     });
     this.#unknowns = new Float64Array(size);
     this.#shift = new Float64Array(size);

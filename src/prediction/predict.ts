@@ -5,7 +5,7 @@ import { waterAt, type Water } from '../equilibrium/water.js';
 import type { InteractionTable } from '../equilibrium/chemical-system.js';
 import { exp } from '../quantities/reproducible-math.js';
 import { readTemperature } from '../quantities/read-temperature.js';
-import { problem, SoluteError } from '../quantities/solute-error.js';
+import { problem, quote, SoluteError, textOf } from '../quantities/solute-error.js';
 import { readSolutes, type SoluteInput } from '../substances/solutes-text.js';
 import { cautionsFor } from './cautions.js';
 import { classify } from './classification.js';
@@ -25,9 +25,9 @@ export type { SoluteInput } from '../substances/solutes-text.js';
 export interface PredictionInput extends Partial<Omit<Conditions, 'temperature'>> {
   /** Celsius, or a text such as "37 °C". Default 25. */
   readonly temperature?: number | string;
-  /** Final volume, for amounts that are masses or moles: "500 mL". */
-  readonly volume?: string;
 }
+
+const DEFAULT_TEMPERATURE = 25;
 
 /** A solved solution with all that was needed to solve it. */
 export interface SolvedSolution {
@@ -44,7 +44,7 @@ export interface SolvedSolution {
 export function predict(solutes: string | readonly SoluteInput[], input: PredictionInput = {}): Prediction {
   const conditions = readConditions(input);
   const water = waterAt(conditions.temperature);
-  const dissolved = dissolve(readSolutes(solutes), water, input.volume);
+  const dissolved = dissolve(readSolutes(solutes), water, conditions.volume);
   const without = solve(dissolved, water, undefined);
   const withAir = solve(dissolved, water, conditions.carbonDioxide);
   const solved = conditions.air === 'equilibrated' ? withAir : without;
@@ -93,23 +93,26 @@ function solve(dissolved: Dissolved, water: Water, carbonDioxide: number | undef
   return { model, table, state };
 }
 
-const AIR: readonly string[] = ['excluded', 'equilibrated'];
+const AIR: readonly unknown[] = ['excluded', 'equilibrated'] satisfies Conditions['air'][];
 
-function readConditions(input: PredictionInput): Conditions {
-  const temperature = readTemperature(input.temperature ?? 25);
-  const air = input.air ?? 'excluded';
+/** Reads the conditions from anything a page may have passed. */
+function readConditions(input: PredictionInput | null | undefined): Conditions {
+  const given = typeof input === 'object' && input !== null ? input : {};
+  const temperature = readTemperature(given.temperature ?? DEFAULT_TEMPERATURE);
+  const air = given.air ?? 'excluded';
   if (!AIR.includes(air)) {
     throw new SoluteError([
-      problem('condition-unknown', `Air can be excluded or equilibrated; “${String(air)}” is neither.`, String(air), {
-        suggestions: AIR.map((value) => ({ value, reason: 'known value' })),
+      problem('condition-unknown', `Air can be excluded or equilibrated; ${quote(textOf(air))} is neither.`, textOf(air), {
+        suggestions: AIR.map((value) => ({ value: String(value), reason: 'known value' })),
       }),
     ]);
   }
-  const carbonDioxide = input.carbonDioxide ?? ROOM_AIR_CARBON_DIOXIDE;
-  if (!(carbonDioxide > 0 && carbonDioxide <= 1)) {
+  const carbonDioxide = given.carbonDioxide ?? ROOM_AIR_CARBON_DIOXIDE;
+  if (typeof carbonDioxide !== 'number' || !(carbonDioxide > 0 && carbonDioxide <= 1)) {
     throw new SoluteError([
-      problem('condition-unknown', `The CO2 content of the air is a mole fraction above 0 and up to 1, such as ${ROOM_AIR_CARBON_DIOXIDE}; “${String(carbonDioxide)}” is not.`, String(carbonDioxide)),
+      problem('condition-unknown', `The CO2 content of the air is a mole fraction above 0 and up to 1, such as ${ROOM_AIR_CARBON_DIOXIDE}; ${quote(textOf(carbonDioxide))} is not.`, textOf(carbonDioxide)),
     ]);
   }
-  return { temperature, air, carbonDioxide };
+  const volume = given.volume ?? undefined;
+  return { temperature, air, carbonDioxide, ...(volume === undefined || volume === '' ? {} : { volume: textOf(volume) }) };
 }

@@ -8,6 +8,8 @@ export interface Conditions {
   readonly air: 'excluded' | 'equilibrated';
   /** CO2 in dry room air, mol/mol. */
   readonly carbonDioxide: number;
+  /** Final volume, for amounts that are masses or moles: "500 mL". */
+  readonly volume?: string;
 }
 
 /** A chemical formula as it is shown: the letters and digits, and the charge apart. */

@@ -1,4 +1,4 @@
-import type { Caution, ConstantUsed, Prediction } from './prediction.js';
+import type { Caution, Conditions, ConstantUsed, Prediction } from './prediction.js';
 
 /** The plain JSON that a host stores. Its schema is data/record.schema.json. */
 export interface SoluteRecord {
@@ -7,7 +7,7 @@ export interface SoluteRecord {
   /** The solutes text as typed. */
   readonly solutes: string;
   readonly understood: readonly { typed: string; formula: string; name?: string; cas?: string; molarMass: number; molarity: number; molality: number; assumptions: readonly string[] }[];
-  readonly conditions: { readonly temperature: number; readonly air: string; readonly carbonDioxide: number };
+  readonly conditions: Conditions;
   readonly pH: number;
   readonly uncertainty: number;
   readonly neutralPH: number;

@@ -2,7 +2,7 @@ import conventions from '../../data/conventions.json';
 import { atTemperature } from '../equilibrium/temperature.js';
 import { atZeroIonicStrength } from '../equilibrium/zero-ionic-strength.js';
 import { LN10 } from '../quantities/reproducible-math.js';
-import type { AcidBaseFamily, HydrolysisSpecies, MetalIon } from '../substances/ion-library.js';
+import type { AcidBaseFamily, MetalIon } from '../substances/ion-library.js';
 
 /** A constant brought to the solution's temperature and to zero ionic strength. */
 export interface ConstantHere {

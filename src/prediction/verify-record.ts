@@ -27,7 +27,7 @@ export interface ChangedConstant {
 export function verifyRecord(record: SoluteRecord): Verification {
   if (!isIntact(record)) return { verdict: 'tampered' };
   try {
-    const now = createRecord(predict(record.solutes, record.conditions as Parameters<typeof predict>[1]), {
+    const now = createRecord(predict(record.solutes, record.conditions), {
       solutes: record.solutes,
       ...(record.label === undefined ? {} : { label: record.label }),
     });

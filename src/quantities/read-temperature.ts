@@ -1,4 +1,4 @@
-import { problem, quote, SoluteError } from './solute-error.js';
+import { problem, quote, SoluteError, textOf } from './solute-error.js';
 
 const LOWEST = 0;
 const HIGHEST = 100;
@@ -8,8 +8,8 @@ const TEXT = /^\s*([+\u2212-]?\d+(?:[.,]\d+)?)\s*(°?\s*C|Cel|K|°?\s*F|\[degF\]
  * Celsius from a number or a text: "37", "37 °C", "310.15 K", "Cel" (UCUM). Fahrenheit is read too.
  * @throws SoluteError `temperature-unreadable`, `temperature-out-of-range` (0 to 100 °C, liquid water at 101 kPa).
  */
-export function readTemperature(given: number | string): number {
-  const typed = String(given);
+export function readTemperature(given: unknown): number {
+  const typed = textOf(given);
   const match = TEXT.exec(typed.normalize('NFKC').replace('°c', '°C'));
   if (!match) {
     throw new SoluteError([

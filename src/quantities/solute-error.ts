@@ -99,6 +99,13 @@ export function quote(piece: string): string {
   return `“${visible(cutPiece(piece))}”`;
 }
 
+/** Any value as text; a value that refuses to be text is shown by its type. */
+export function textOf(value: unknown): string {
+  if (typeof value === 'string') return value;
+  if (typeof value === 'number' || typeof value === 'boolean' || typeof value === 'bigint') return String(value);
+  return typeof value;
+}
+
 function cutPiece(piece: string): string {
   const characters = Array.from(piece);
   return characters.length > LONGEST_PIECE ? `${characters.slice(0, LONGEST_PIECE - 1).join('')}…` : piece;

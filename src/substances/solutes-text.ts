@@ -77,7 +77,8 @@ function readList(list: readonly SoluteInput[]): ReadSolute[] {
   if (!Array.isArray(list) || list.length === 0) throw new SoluteError([problem('empty-input', `Nothing is dissolved yet. Write an amount and a substance, for example ${EXAMPLE}.`, '')]);
   refuseTooMany(list.length);
   return collect(
-    list.map((item: unknown, index) => () => {
+    // Array.from, since map would pass over the holes of a sparse list.
+    Array.from(list as readonly unknown[], (item, index) => () => {
       const entry = (typeof item === 'object' && item !== null ? item : {}) as Record<string, unknown>;
       const text = (key: string): string => (Object.hasOwn(entry, key) && (typeof entry[key] === 'string' || typeof entry[key] === 'number') ? String(entry[key]) : '').slice(0, LONGEST_PIECE);
       const substance = text('substance').trim();
@@ -187,7 +188,7 @@ function withoutAmount(text: string, index: number, range: TextRange): SoluteErr
     const word = /^\S+/u.exec(rest)?.[0] ?? '';
     if (identifyQuietly(rest)) {
       const suggestions = ['mol/L', 'mmol/L', 'g/L'].map((unit) => ({ value: `${text.slice(0, number)} ${unit} ${rest}`, reason: 'with a unit' }));
-      return failed('unit-unknown', `${quote(text)} has a number but no unit. Write for example ${suggestions[0]!.value}.`, text.slice(0, number), index, range, suggestions);
+      return failed('unit-unknown', `${quote(text)} has a number but no unit. Write for example ${quote(suggestions[0]!.value)}.`, text.slice(0, number), index, range, suggestions);
     }
     if (/^[%A-Za-z\u00b5\u03bc/]/.test(word) && rest.length > word.length) {
       const suggestions = nearestUnits(word);
@@ -201,7 +202,7 @@ function withoutAmount(text: string, index: number, range: TextRange): SoluteErr
       );
     }
   }
-  return failed('missing-amount', `${quote(text)} has no amount. Write the amount before or after it, for example 0.10 mol/L ${text}.`, text, index, range, [
+  return failed('missing-amount', `${quote(text)} has no amount. Write the amount before or after it, for example ${EXAMPLE}.`, text, index, range, [
     { value: `0.10 mol/L ${text}`, reason: 'with an amount' },
   ]);
 }
