@@ -6,7 +6,8 @@ import type { Dissolved } from './dissolve.js';
 import { formatChemical } from './plain-text.js';
 import type { Caution, Conditions } from './prediction.js';
 import type { SolvedSolution } from './predict.js';
-import { chemicalOf } from './solution-model.js';
+import type { Particle } from '../substances/ion-library.js';
+import { chemicalOf, type ComponentMeaning } from './solution-model.js';
 
 /** What the cautions are read from. */
 export interface CautionInput {
@@ -60,9 +61,10 @@ function toxicGases({ solved, dissolved }: CautionInput): Caution[] {
   return data.toxicGases.flatMap(({ code, species, gas }) => {
     const index = solved.model.species.findIndex(({ chemical }) => chemical.id === species);
     const meaning = solved.model.species[index];
-    if (index < 0 || !meaning || (!codes.has(code) && solved.model.system.components[meaning.component]!.total === 0)) return [];
+    const total = solved.model.system.components[meaning?.parts[0]?.[0] ?? -1]?.total ?? 0;
+    if (!meaning || (!codes.has(code) && total === 0)) return [];
     const molality = solved.state.molality[index]!;
-    const share = molality / solved.model.system.components[meaning.component]!.total;
+    const share = molality / total;
     const free = share > conventions.negligibleShare;
     return [
       {
@@ -86,20 +88,41 @@ function ionRemarks({ dissolved }: CautionInput): Caution[] {
   });
 }
 
-/** Metal ions together with anything that binds them: complexes are not among the species. */
+/** Metal ions together with anything that may bind them, where no constant of the pair is known. */
 function complexes({ solved, dissolved }: CautionInput): Caution[] {
-  const metals = solved.model.components.filter((meaning) => meaning.kind === 'metal' && !data.complexes.hardCations.includes(meaning.metal.ion));
-  const ligands = dissolved.particles.filter(({ particle }) => particle.charge <= 0 && !particle.gives?.metals && !data.complexes.weakLigands.includes(particle.id) && particle.id !== 'OH-');
-  if (metals.length === 0 || ligands.length === 0) return [];
-  const names = metals.map((meaning) => (meaning.kind === 'metal' ? formatChemical({ label: meaning.metal.formula, charge: meaning.metal.charge }) : ''));
+  const { components, complexes: known, species } = solved.model;
+  const bound = new Set(known.flatMap(({ species: index }) => pairsOf(species[index]!.parts.map(([component]) => nameOf(components[component]!)))));
+  const missing = components.flatMap((meaning) => {
+    if (meaning.kind !== 'metal' || data.complexes.hardCations.includes(meaning.metal.ion)) return [];
+    const metal = { label: meaning.metal.formula, charge: meaning.metal.charge };
+    return dissolved.particles
+      .filter(({ particle }) => mayBind(particle) && !bound.has(`${meaning.metal.key} ${Object.keys(particle.gives?.families ?? {})[0] ?? particle.id}`))
+      .map(({ particle }) => `${formatChemical(metal)} with ${formatChemical(chemicalOf(particle))}`);
+  });
+  if (missing.length === 0) return [];
   return [
     {
       code: 'complexes-not-included',
       gravity: 'warning',
-      text: `Complexes of ${names.join(', ')} with ${ligands.map(({ particle }) => formatChemical(chemicalOf(particle))).join(', ')} are not part of this calculation; the real pH can differ by more than the stated uncertainty.`,
-      basis: 'Scope of the model',
+      text: `No constants are known here for complexes of ${missing.join(', ')}; if they form, the real pH differs by more than the stated uncertainty.`,
+      basis: 'Scope of the data',
     },
   ];
+}
+
+function mayBind(particle: Particle): boolean {
+  const proton = particle.id === 'OH-' || particle.id === 'H+' || particle.id === 'O-2';
+  return particle.charge <= 0 && !proton && !particle.gives?.metals && !data.complexes.weakLigands.includes(particle.id);
+}
+
+function nameOf(meaning: ComponentMeaning): string {
+  if (meaning.kind === 'family') return meaning.family.key;
+  return meaning.kind === 'metal' ? meaning.metal.key : meaning.particle.id;
+}
+
+/** Every "first other" of a complex: its metal with each of its ligands. */
+function pairsOf([metal, ...ligands]: readonly string[]): string[] {
+  return ligands.map((ligand) => `${metal} ${ligand}`);
 }
 
 function validity({ solved, conditions }: CautionInput): Caution[] {
@@ -121,13 +144,13 @@ function validity({ solved, conditions }: CautionInput): Caution[] {
       basis: 'Range of the thermodynamic data',
     });
   }
-  const held = solved.model.components.filter((meaning) => meaning.constants.some((constant) => constant.heldAtTemperature));
+  const held = solved.model.components.filter((meaning) => meaning.constants.some((constant) => constant.enthalpyUnknown));
   if (held.length > 0) {
-    const names = held.map((meaning) => (meaning.kind === 'family' ? meaning.family.name : meaning.metal.name));
+    const names = held.map((meaning) => (meaning.kind === 'family' ? meaning.family.name : meaning.kind === 'metal' ? meaning.metal.name : ''));
     cautions.push({
       code: 'enthalpy-unknown',
       gravity: 'note',
-      text: `No reaction enthalpy is known for some steps of ${names.join(', ')}; their constants were not moved to ${conditions.temperature} °C and the uncertainty is widened.`,
+      text: `The reaction enthalpy of some steps of ${names.join(', ')} is unknown; their constants at ${conditions.temperature} °C are estimated and the uncertainty is widened.`,
       basis: 'Data',
     });
   }

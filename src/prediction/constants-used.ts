@@ -46,7 +46,7 @@ export function constantsUsed({ model }: SolvedSolution, { pKw, temperature }: W
           obtained: step.obtained,
         });
       });
-    } else {
+    } else if (meaning.kind === 'metal') {
       meaning.metal.hydrolysis.forEach((species, index) => {
         used.push({
           id: `${meaning.metal.key} ${species.id}`,
@@ -63,6 +63,21 @@ export function constantsUsed({ model }: SolvedSolution, { pKw, temperature }: W
         });
       });
     }
+  }
+  for (const { complex, constant } of model.complexes) {
+    used.push({
+      id: `complex ${complex.id}`,
+      description: formatChemical(complex),
+      quantity: 'log10 β',
+      value: complex.logBeta,
+      uncertainty: complex.uncertainty,
+      temperature: complex.temperature,
+      ionicStrength: complex.ionicStrength,
+      valueHere: constant.log10K,
+      source: complex.source,
+      citation: citationOf(complex.source),
+      obtained: complex.obtained,
+    });
   }
   return used;
 }

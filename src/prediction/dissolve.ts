@@ -1,6 +1,6 @@
 import type { Decimal } from '../quantities/decimal.js';
 import { readAmount } from '../quantities/amount.js';
-import { dilutedWaterContent } from '../quantities/solution-density.js';
+import { litreOfSolution, type LitreOfSolution, type VolumeBasis } from '../quantities/solution-density.js';
 import { problem, quote, SoluteError, type Problem } from '../quantities/solute-error.js';
 import { parseUnit } from '../quantities/units.js';
 import type { Water } from '../equilibrium/water.js';
@@ -22,52 +22,80 @@ export interface DissolvedSolute {
   readonly molality: number;
   /** Standard uncertainty of the molality from the digits typed: half of the last digit, rectangular. */
   readonly uncertainty: number;
+  /** For an amount per litre: how the volume of the solute is known. */
+  readonly volumeBasis?: VolumeBasis;
 }
 
 const LARGEST_MOLALITY = 60;
 const SMALLEST_MOLALITY = 1e-12;
+/** mol/L above which the volume of a solute matters to the molality. */
+const NOTEWORTHY_MOLARITY = 0.02;
 
 /**
- * Turns the amounts into molalities in exact decimal arithmetic, and the substances into particles.
+ * Turns the amounts into molalities, and the substances into particles. Moles are exact decimals; where amounts are per
+ * litre, the density model gives the water in that litre.
  * @throws SoluteError for an ion without a sound constant, an amount outside what water can hold, or a mass without volume.
  */
 export function dissolve(solutes: readonly ReadSolute[], water: Water, volume: string | undefined): Dissolved {
-  const waterPerLitre = dilutedWaterContent({ temperature: water.temperature, waterDensity: water.density });
   const litres = volume === undefined ? undefined : readVolume(volume);
+  const perLitre = solutes.map((read) => molesPerLitre(read, litres));
+  refuse(solutes, perLitre);
+  const litre = litreOf(solutes, perLitre, water);
   const problems: Problem[] = [];
   const dissolved: DissolvedSolute[] = [];
   const understood: UnderstoodSolute[] = [];
   solutes.forEach((read, index) => {
-    const where = { range: read.range, solute: index };
-    for (const { particle } of read.substance.parts) {
-      if (particle.refused !== undefined) {
-        problems.push(problem('ion-without-constant', `${quote(read.typed)} contains ${particle.names[0] ?? particle.formula}, for which no prediction is made: ${particle.refused}`, read.typed, where));
-      }
-    }
-    const perLitre = molesPerLitre(read, litres);
-    if (perLitre === undefined) {
-      problems.push(
-        problem('missing-amount', `${quote(read.typed)} states how much was taken, but not in which volume. State the final volume, or write the amount per litre.`, read.typed, {
-          ...where,
-          suggestions: [{ value: 'volume="1 L"', reason: 'final volume' }],
-        }),
-      );
-      return;
-    }
-    const exact = read.amount.kind === 'molality' ? read.amount.value : perLitre.div(waterPerLitre);
-    const molality = exact.toNumber();
+    const inMolality = read.amount.kind === 'molality';
+    const molality = inMolality ? read.amount.value.toNumber() : perLitre[index]!.toNumber() / litre.water;
     if (!(molality >= SMALLEST_MOLALITY && molality <= LARGEST_MOLALITY)) {
-      const limit = molality > LARGEST_MOLALITY ? `more than ${LARGEST_MOLALITY} mol in a kilogram of water, which no salt reaches` : 'less than a picomole in a kilogram of water';
-      problems.push(problem('amount-out-of-range', `${quote(`${read.amount.number} ${read.amount.unit}`)} of ${read.substance.formula} is ${limit}. Check the number and the unit.`, read.typed, where));
+      problems.push(outOfRange(read, index, molality));
       return;
     }
     const relative = read.amount.halfDigit.div(read.amount.value).toNumber() / Math.sqrt(3);
-    dissolved.push({ read, molality, uncertainty: molality * relative });
-    const molarity = read.amount.kind === 'molality' ? read.amount.value.times(waterPerLitre) : perLitre;
-    understood.push(understand(read, molarity.toNumber(), molality));
+    const basis = inMolality ? undefined : litre.bases[index]!;
+    dissolved.push({ read, molality, uncertainty: molality * relative, ...(basis === undefined ? {} : { volumeBasis: basis }) });
+    understood.push(understand(read, inMolality ? molality * litre.water : perLitre[index]!.toNumber(), molality, basis));
   });
   if (problems.length > 0) throw new SoluteError(problems);
   return { solutes: dissolved, particles: sumParticles(dissolved), understood };
+}
+
+function refuse(solutes: readonly ReadSolute[], perLitre: readonly (Decimal | undefined)[]): void {
+  const problems = solutes.flatMap((read, index) => {
+    const where = { range: read.range, solute: index };
+    const refused = read.substance.parts.flatMap(({ particle }) =>
+      particle.refused === undefined
+        ? []
+        : [problem('ion-without-constant', `${quote(read.typed)} contains ${particle.names[0] ?? particle.formula}, for which no prediction is made: ${particle.refused}`, read.typed, where)],
+    );
+    if (perLitre[index] !== undefined) return refused;
+    return [
+      ...refused,
+      problem('missing-amount', `${quote(read.typed)} states how much was taken, but not in which volume. State the final volume, or write the amount per litre.`, read.typed, {
+        ...where,
+        suggestions: [{ value: 'volume="1 L"', reason: 'final volume' }],
+      }),
+    ];
+  });
+  if (problems.length > 0) throw new SoluteError(problems);
+}
+
+/** The litre that all solutes make; those given per kilogram of water enter with the molarity they would have in water. */
+function litreOf(solutes: readonly ReadSolute[], perLitre: readonly (Decimal | undefined)[], water: Water): LitreOfSolution {
+  return litreOfSolution(
+    solutes.map(({ amount, substance }, index) => ({
+      molarity: amount.kind === 'molality' ? (amount.value.toNumber() * water.density) / 1000 : perLitre[index]!.toNumber(),
+      anhydrousMass: substance.anhydrousMass,
+      particles: substance.parts.map(({ particle, count }) => ({ id: particle.id, count })),
+    })),
+    water.temperature,
+    water.density,
+  );
+}
+
+function outOfRange(read: ReadSolute, index: number, molality: number): Problem {
+  const limit = molality > LARGEST_MOLALITY ? `more than ${LARGEST_MOLALITY} mol in a kilogram of water, which no salt reaches` : 'less than a picomole in a kilogram of water';
+  return problem('amount-out-of-range', `${quote(`${read.amount.number} ${read.amount.unit}`)} of ${read.substance.formula} is ${limit}. Check the number and the unit.`, read.typed, { range: read.range, solute: index });
 }
 
 /** mol per litre of solution; undefined when the volume is missing. For molalities the value is not used. */
@@ -101,13 +129,13 @@ function sumParticles(solutes: readonly DissolvedSolute[]): DissolvedParticle[] 
   return [...sums.values()];
 }
 
-function understand(read: ReadSolute, molarity: number, molality: number): UnderstoodSolute {
+function understand(read: ReadSolute, molarity: number, molality: number, basis: VolumeBasis | undefined): UnderstoodSolute {
   const { substance, amount } = read;
   const assumptions: Remark[] = [];
   if (substance.assumed.includes('hydrate-anhydrous')) assumptions.push({ code: 'hydrate-anhydrous', text: `Taken as anhydrous; hydrates of ${substance.name ?? substance.formula} exist.` });
   if (amount.decimalComma) assumptions.push({ code: 'decimal-comma', text: `${amount.number} was read with a decimal comma.` });
   if (amount.kind === 'molality') assumptions.push({ code: 'per-kilogram-water', text: 'mol/kg is taken per kilogram of water.' });
-  else assumptions.push({ code: 'density-of-water', text: 'One litre of solution is taken to hold as much water as one litre of water.' });
+  if (basis === 'unknown' && molarity > NOTEWORTHY_MOLARITY) assumptions.push({ code: 'volume-unknown', text: 'The volume it takes up in solution is not known here and is left out.' });
   return {
     typed: read.typed,
     ...(read.range ? { range: read.range } : {}),

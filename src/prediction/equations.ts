@@ -2,11 +2,12 @@ import conventions from '../../data/conventions.json';
 import { exp10 } from '../quantities/reproducible-math.js';
 import type { Water } from '../equilibrium/water.js';
 import { compositionOf } from '../substances/formula.js';
+import type { Complex } from '../substances/complex-library.js';
 import { familyOf, metalOf, particleOf, type AcidBaseFamily, type FamilyState } from '../substances/ion-library.js';
 import type { Dissolved } from './dissolve.js';
 import type { Chemical, ConstantUsed, Equation, EquationTerm, Reason } from './prediction.js';
 import type { SolvedSolution } from './predict.js';
-import { chemicalOf, HYDROXIDE, PROTON, waterBetween, WATER, type ComponentMeaning, type DissolvedParticle } from './solution-model.js';
+import { chemicalOf, HYDROXIDE, PROTON, waterBetween, WATER, type ComponentMeaning, type DissolvedParticle, type SpeciesMeaning } from './solution-model.js';
 import { componentTotals } from './species-table.js';
 
 const NEGLIGIBLE = conventions.negligibleShare;
@@ -44,6 +45,7 @@ export function hydrolysisEquations(dissolved: Dissolved, solved: SolvedSolution
   const equations = dissolved.particles.flatMap(({ particle }) => writer.equationsOf(particle));
   const kinds = reason.code === 'donor-decides' ? ['proton-donation', 'metal-hydrolysis'] : reason.code === 'acceptor-decides' ? ['proton-acceptance'] : [];
   const decisive = equations.findIndex(({ of, reactants, kind }) => kinds.includes(kind) && (of === reason.chemical?.id || reactants[0]!.chemical.id === reason.chemical?.id));
+  equations.push(...writer.complexEquations());
   const written = equations.map((equation, index) => (index === decisive ? { ...equation, decides: true } : equation));
   return written.length > 0 ? written : [writer.waterEquation()];
 }
@@ -202,6 +204,48 @@ class EquationWriter {
       );
   }
 
+  /** Complexes that hold more than a negligible share of their metal or ligand, most first. */
+  complexEquations(): Equation[] {
+    const { model, state } = this.#solved;
+    return model.complexes
+      .map((meaning) => {
+        const species = model.species[meaning.species]!;
+        const share = Math.max(...species.parts.map(([component, units]) => (units * state.molality[meaning.species]!) / this.#totals[component]!));
+        return { ...meaning, species, share };
+      })
+      .filter(({ share }) => share > NEGLIGIBLE)
+      .sort((a, b) => b.share - a.share)
+      .map(({ complex, constant, species, share }) => this.#complexEquation(complex, constant.log10K, species, share));
+  }
+
+  #complexEquation(complex: Complex, log10K: number, species: SpeciesMeaning, share: number): Equation {
+    const { model } = this.#solved;
+    const parts = species.parts.map(([component, units]) => ({ units, ...this.#reference(model.components[component]!) }));
+    const protons = species.protons;
+    const freed = parts.reduce((sum, { units, formula }) => sum + units * oxygen(formula), 0) + protons - oxygen(complex.formula);
+    return this.#equilibrium(
+      'complex-formation',
+      [...parts.map(({ units, chemical }) => [units, chemical] as const), [protons, PROTON], [-freed, WATER]],
+      [[1, species.chemical], [-protons, PROTON], [freed, WATER]],
+      log10K,
+      'β',
+      parts[0]!.chemical.id,
+      `complex ${complex.id}`,
+      share,
+    );
+  }
+
+  /** The form in which a component stands in a formation constant. */
+  #reference(meaning: ComponentMeaning): { chemical: Chemical; formula: string } {
+    if (meaning.kind === 'family') {
+      const state = meaning.family.states.at(-1)!;
+      return { chemical: state, formula: state.formula };
+    }
+    if (meaning.kind === 'ligand') return { chemical: chemicalOf(meaning.particle), formula: meaning.particle.formula };
+    const { ion, formula, charge, name } = meaning.metal;
+    return { chemical: { id: ion, label: formula, charge, name }, formula };
+  }
+
   #once(key: string, make: () => Equation): Equation[] {
     if (this.#written.has(key)) return [];
     this.#written.add(key);
@@ -209,8 +253,8 @@ class EquationWriter {
   }
 
   #share(species: number): number {
-    const meaning = this.#solved.model.species[species]!;
-    return (this.#solved.state.molality[species]! * meaning.units) / this.#totals[meaning.component]!;
+    const [component, units] = this.#solved.model.species[species]!.parts[0]!;
+    return (this.#solved.state.molality[species]! * units) / this.#totals[component]!;
   }
 
   #meaningOf(id: string): ComponentMeaning | undefined {

@@ -70,11 +70,11 @@ export interface EquationTerm {
 
 /** A reaction as a chemist writes it, with its constant at the solution's temperature. */
 export interface Equation {
-  readonly kind: 'dissolution' | 'proton-donation' | 'proton-acceptance' | 'metal-hydrolysis' | 'water';
+  readonly kind: 'dissolution' | 'proton-donation' | 'proton-acceptance' | 'metal-hydrolysis' | 'complex-formation' | 'water';
   readonly reactants: readonly EquationTerm[];
   readonly products: readonly EquationTerm[];
   readonly arrow: 'complete' | 'equilibrium';
-  /** Symbol of the constant: "Ka", "Kb", "*β" (hydrolysis), "Kw". Absent for dissolution. */
+  /** Symbol of the constant: "Ka", "Kb", "*β" (hydrolysis), "β" (complexes), "Kw". Absent for dissolution. */
   readonly symbol?: string;
   /** Thermodynamic constant, molality scale. */
   readonly K?: number;
@@ -100,7 +100,7 @@ export interface ConstantUsed {
   readonly id: string;
   /** What it belongs to, in words. */
   readonly description: string;
-  readonly quantity: 'pKa' | 'log10 *β' | 'pKw' | 'log10 K';
+  readonly quantity: 'pKa' | 'log10 *β' | 'log10 β' | 'pKw';
   readonly value: number;
   /** Standard uncertainty of the value; null when the source gives none. */
   readonly uncertainty: number | null;

@@ -1,4 +1,4 @@
-import type { ComponentMeaning, DissolvedParticle } from './solution-model.js';
+import type { ComponentMeaning, DissolvedParticle, SpeciesMeaning } from './solution-model.js';
 import type { SolvedSolution } from './predict.js';
 
 /** What one acid–base family or metal did with protons in the solution, compared with how it was put in. */
@@ -38,13 +38,15 @@ export function protonAccounts(particles: readonly DissolvedParticle[], { model,
     let square = 0;
     let units = 0;
     model.species.forEach((species, j) => {
-      if (species.component !== component) return;
+      const part = species.parts.find(([index]) => index === component);
+      if (!part) return;
       const molality = state.molality[j]!;
-      const change = species.protons - initialProtonation * species.units;
+      const protons = protonsOf(species, meaning.kind);
+      const change = protons - initialProtonation * part[1];
       if (change < 0) donated -= change * molality;
       else accepted += change * molality;
-      bound += species.protons * molality;
-      square += species.protons * species.protons * molality;
+      bound += protons * molality;
+      square += protons * protons * molality;
       units += molality;
     });
     if (!Number.isInteger(initialProtonation)) {
@@ -59,6 +61,13 @@ export function protonAccounts(particles: readonly DissolvedParticle[], { model,
   return { components, strong, strongParticles };
 }
 
+/** Protons of a species that belong to the component: in a complex the bound ones to the ligand, the hydroxide to the metal. */
+function protonsOf(species: SpeciesMeaning, kind: ComponentMeaning['kind']): number {
+  if (species.parts.length === 1) return species.protons;
+  return kind === 'metal' ? Math.min(0, species.protons) : Math.max(0, species.protons);
+}
+
 function countOf(gives: DissolvedParticle['particle']['gives'], meaning: ComponentMeaning): number {
-  return (meaning.kind === 'family' ? gives?.families?.[meaning.family.key] : gives?.metals?.[meaning.metal.key]) ?? 0;
+  if (meaning.kind === 'family') return gives?.families?.[meaning.family.key] ?? 0;
+  return meaning.kind === 'metal' ? (gives?.metals?.[meaning.metal.key] ?? 0) : 0;
 }

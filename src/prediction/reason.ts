@@ -106,6 +106,7 @@ export function shownAs(account: ProtonAccount): Chemical {
     const { metal } = account.meaning;
     return main.id === metal.ion ? { id: metal.ion, label: metal.formula, charge: metal.charge, name: metal.name } : chemicalOf(main);
   }
+  if (account.meaning.kind === 'ligand') return chemicalOf(main);
   const { states } = account.meaning.family;
   if (states.some((state) => state.id === main.id)) return chemicalOf(main);
   return states[states.length - 1 - Math.round(account.initialProtonation)] ?? chemicalOf(main);
@@ -115,11 +116,11 @@ export function shownAs(account: ProtonAccount): Chemical {
 function counterIon(solved: SolvedSolution, charge: number): Chemical | undefined {
   let best: Chemical | undefined;
   let most = 0;
-  solved.model.species.forEach((species, j) => {
-    if (species.component !== -1 || species.chemical.id === 'H3O+' || species.chemical.id === 'OH-') return;
-    if (Math.sign(species.chemical.charge) !== -Math.sign(charge) || solved.state.molality[j]! <= most) return;
-    most = solved.state.molality[j]!;
-    best = species.chemical;
-  });
+  for (const index of solved.model.spectators) {
+    const { chemical } = solved.model.species[index]!;
+    if (Math.sign(chemical.charge) !== -Math.sign(charge) || solved.state.molality[index]! <= most) continue;
+    most = solved.state.molality[index]!;
+    best = chemical;
+  }
   return best;
 }

@@ -11,8 +11,9 @@ export function speciesTable({ model, state }: SolvedSolution): Species[] {
   return model.species.map((species, j) => {
     const molality = state.molality[j]!;
     const base = { chemical: species.chemical, molality, activityCoefficient: species.chemical.charge === 0 ? 1 : exp(state.lnGamma[j]!) };
-    if (species.component < 0) return base;
-    return { ...base, share: (molality * species.units) / totals[species.component]!, component: model.system.components[species.component]!.id };
+    const [part] = species.parts;
+    if (!part) return base;
+    return { ...base, share: (molality * part[1]) / totals[part[0]]!, component: model.system.components[part[0]]!.id };
   });
 }
 
@@ -20,7 +21,7 @@ export function speciesTable({ model, state }: SolvedSolution): Species[] {
 export function componentTotals({ model, state }: Pick<SolvedSolution, 'model' | 'state'>): Float64Array {
   const totals = new Float64Array(model.components.length);
   model.species.forEach((species, j) => {
-    if (species.component >= 0) totals[species.component] = totals[species.component]! + species.units * state.molality[j]!;
+    for (const [component, units] of species.parts) totals[component] = totals[component]! + units * state.molality[j]!;
   });
   return totals;
 }
@@ -30,7 +31,7 @@ export function dominantChemicals({ model, state }: SolvedSolution): Chemical[] 
   const best = new Map<number | string, { chemical: Chemical; molality: number }>();
   model.species.forEach((species, j) => {
     if (species.chemical.id === 'H3O+' || species.chemical.id === 'OH-') return;
-    const key = species.component < 0 ? species.chemical.id : species.component;
+    const key = species.parts[0]?.[0] ?? species.chemical.id;
     const molality = state.molality[j]!;
     if (molality > (best.get(key)?.molality ?? 0)) best.set(key, { chemical: species.chemical, molality });
   });

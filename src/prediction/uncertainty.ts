@@ -6,6 +6,7 @@ import type { Dissolved, DissolvedSolute } from './dissolve.js';
 import { formatChemical } from './plain-text.js';
 import type { UncertaintyContribution } from './prediction.js';
 import type { SolvedSolution } from './predict.js';
+import type { Contribution } from '../substances/ion-library.js';
 import type { ComponentMeaning } from './solution-model.js';
 
 export interface UncertaintyResult {
@@ -21,6 +22,7 @@ type Line = Omit<UncertaintyContribution, 'share'>;
 /** Lines below this share of the variance are left out of the budget. */
 const SMALLEST_SHARE = 1e-4;
 const SCALE = conventions.scaleConvention;
+const DENSITY = { none: 0, ...conventions.densityUncertainty.relativePerMolality };
 
 /**
  * Combined standard uncertainty of pH after the Guide to the Expression of Uncertainty in Measurement (JCGM 100:2008,
@@ -32,6 +34,7 @@ export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved): Unc
   if (!slopes) return { standard: Infinity, budget: [], bufferCapacity: 0 };
   const lines: Line[] = [
     ...solved.model.components.flatMap((meaning) => constantLines(meaning, slopes)),
+    ...complexLines(solved, slopes),
     ...dissolved.solutes.map((solute) => amountLine(solute, solved, slopes)),
     ...modelLines(solved, dissolved, slopes),
   ];
@@ -52,6 +55,7 @@ function constantLines(meaning: ComponentMeaning, slopes: Sensitivities): Line[]
       basis: constant.stated ? 'stated' : 'graded',
     }));
   }
+  if (meaning.kind === 'ligand') return [];
   // A change of one step shifts all states on its deprotonated side against the others.
   let deprotonated = 0;
   const lines: Line[] = [];
@@ -68,6 +72,15 @@ function constantLines(meaning: ComponentMeaning, slopes: Sensitivities): Line[]
   return lines;
 }
 
+function complexLines({ model }: SolvedSolution, slopes: Sensitivities): Line[] {
+  return model.complexes.map(({ complex, constant, species }) => ({
+    of: `log10 β of ${formatChemical(complex)}`,
+    kind: 'constant',
+    contribution: Math.abs(slopes.toLnBeta[species]!) * LN10 * constant.uncertainty,
+    basis: constant.stated ? 'stated' : 'graded',
+  }));
+}
+
 function amountLine(solute: DissolvedSolute, solved: SolvedSolution, slopes: Sensitivities): Line {
   return { of: `amount of ${solute.read.substance.formula}`, kind: 'amount', contribution: Math.abs(amountSlope(solute, solved, slopes)) * solute.uncertainty, basis: 'digits' };
 }
@@ -76,11 +89,10 @@ function amountLine(solute: DissolvedSolute, solved: SolvedSolution, slopes: Sen
 function amountSlope(solute: DissolvedSolute, { model }: SolvedSolution, slopes: Sensitivities): number {
   let slope = 0;
   for (const { particle, count } of solute.read.substance.parts) {
-    const gives = particle.gives;
-    if (!gives) continue;
+    const gives = particle.gives ?? { ions: { [particle.id]: 1 } };
     slope += count * (gives.protons ?? 0) * slopes.toProtonTotal;
     model.components.forEach((meaning, component) => {
-      const units = (meaning.kind === 'family' ? gives.families?.[meaning.family.key] : gives.metals?.[meaning.metal.key]) ?? 0;
+      const units = unitsIn(gives, meaning);
       if (units === 0) return;
       const held = model.system.components[component]!.lnActivity !== undefined;
       // A family held by the air is counted from its most protonated state.
@@ -89,6 +101,11 @@ function amountSlope(solute: DissolvedSolute, { model }: SolvedSolution, slopes:
     });
   }
   return slope;
+}
+
+function unitsIn(gives: Contribution, meaning: ComponentMeaning): number {
+  if (meaning.kind === 'family') return gives.families?.[meaning.family.key] ?? 0;
+  return (meaning.kind === 'metal' ? gives.metals?.[meaning.metal.key] : gives.ions?.[meaning.particle.id]) ?? 0;
 }
 
 function modelLines({ model, table, state }: SolvedSolution, dissolved: Dissolved, slopes: Sensitivities): Line[] {
@@ -105,11 +122,12 @@ function modelLines({ model, table, state }: SolvedSolution, dissolved: Dissolve
       pairs += line * line;
     }
   }
-  const scale = SCALE.uncertainty * Math.sqrt(state.ionicStrength / SCALE.ionicStrength);
-  const perLitre = dissolved.solutes.filter(({ read }) => read.amount.kind !== 'molality');
   const total = dissolved.solutes.reduce((sum, { molality }) => sum + molality, 0);
-  const relative = (conventions.densityUncertainty.relativePerMolality * total) / Math.sqrt(3);
-  const density = perLitre.reduce((sum, solute) => sum + amountSlope(solute, { model, table, state }, slopes) * solute.molality * relative, 0);
+  const scale = SCALE.uncertainty * Math.sqrt(state.ionicStrength / SCALE.ionicStrength);
+  const density = dissolved.solutes.reduce((sum, solute) => {
+    const relative = (DENSITY[solute.volumeBasis ?? 'none'] * total) / Math.sqrt(3);
+    return sum + amountSlope(solute, { model, table, state }, slopes) * solute.molality * relative;
+  }, 0);
   return [
     { of: 'interaction coefficients', kind: 'model', contribution: Math.sqrt(pairs), basis: 'model' },
     { of: 'convention of the pH scale', kind: 'model', contribution: scale, basis: 'model' },

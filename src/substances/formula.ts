@@ -69,7 +69,8 @@ function splitAtDots(body: string): string[] {
 export function molarMass(composition: Composition): number {
   let mass = 0;
   for (const [element, count] of composition) mass += WEIGHTS.get(element)![0] * count;
-  return mass;
+  // Atomic weights have at most six decimals; the sum's rounding noise beyond them is taken away.
+  return Math.round(mass * 1e6) / 1e6;
 }
 
 /** Composition as one string, for comparing: elements in alphabetical order. */

@@ -17,6 +17,8 @@ export interface IdentifiedSubstance {
   readonly composition: Composition;
   /** g/mol, hydrate water included. */
   readonly molarMass: number;
+  /** g/mol without water of crystallisation. */
+  readonly anhydrousMass: number;
   readonly parts: Parts;
   /** Codes of what was taken for granted. */
   readonly assumed: readonly ('hydrate-anhydrous' | 'split-by-composition' | 'named-from-ions')[];
@@ -84,6 +86,7 @@ function identifyFormula(text: string, formula: Formula): IdentifiedSubstance | 
       hydrateWater: formula.hydrateWater,
       composition: formula.composition,
       molarMass: molarMass(formula.composition),
+      anhydrousMass: molarMass(waterFree),
       parts,
       assumed: ['split-by-composition'],
     };
@@ -153,6 +156,7 @@ function identifyName(text: string): IdentifiedSubstance | NotIdentified | undef
     hydrateWater,
     composition,
     molarMass: molarMass(composition),
+    anhydrousMass: molarMass(compositionOf(reading.formula)),
     parts: reading.parts,
     assumed: water === undefined ? ['named-from-ions', 'hydrate-anhydrous'] : ['named-from-ions'],
   };
@@ -172,6 +176,7 @@ function fromList(substance: ListedSubstance, unhydratedName = false): Identifie
       hydrateWater: formula.hydrateWater,
       composition: formula.composition,
       molarMass: molarMass(formula.composition),
+      anhydrousMass: molarMass(withoutWater(formula)),
       parts: partsOf(substance.parts),
       assumed: [],
     };
