@@ -1,7 +1,7 @@
 /**
  * Solves A x = b for a symmetric positive definite matrix after scaling its diagonal to one (Jacobi), by Cholesky
  * factorisation. `a` is row-major n×n and is overwritten with the factor; `b` is overwritten with x.
- * A pivot lost to rounding is replaced by a tiny one, which turns the step towards the gradient instead of failing.
+ * A pivot lost to rounding is replaced by one, which makes the step in that direction a gradient step.
  */
 export function solveScaled(a: Float64Array, b: Float64Array, n: number, scale: Float64Array): void {
   factorScaled(a, n, scale);
@@ -15,7 +15,7 @@ export function factorScaled(a: Float64Array, n: number, scale: Float64Array): v
   for (let j = 0; j < n; j++) {
     let pivot = a[j * n + j]!;
     for (let k = 0; k < j; k++) pivot -= a[j * n + k]! * a[j * n + k]!;
-    pivot = Math.sqrt(pivot > SMALLEST_PIVOT ? pivot : SMALLEST_PIVOT);
+    pivot = pivot > SMALLEST_PIVOT ? Math.sqrt(pivot) : 1;
     a[j * n + j] = pivot;
     for (let i = j + 1; i < n; i++) {
       let sum = a[i * n + j]!;
@@ -40,7 +40,8 @@ export function solveFactored(a: Float64Array, b: Float64Array, n: number, scale
   for (let i = 0; i < n; i++) b[i] = b[i]! * scale[i]!;
 }
 
-const SMALLEST_PIVOT = 1e-18;
+/** Relative to the unit diagonal. */
+const SMALLEST_PIVOT = 1e-15;
 
 /**
  * Solves A x = b by Gaussian elimination with partial pivoting; `a` (row-major n×n) and `b` are overwritten.

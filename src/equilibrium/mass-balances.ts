@@ -148,7 +148,29 @@ export class MassBalances {
     this.#unknowns[last] = y;
     this.#setShift(mean);
     this.#setExponents(lnGamma);
+    this.#boundMixedSpecies();
     this.#evaluate(this.#unknowns);
+  }
+
+  /** Lowers the activities of the components of every complex that by itself would hold more of one than there is. */
+  #boundMixedSpecies(): void {
+    const last = this.#size - 1;
+    for (let j = 0; j < this.molality.length; j++) {
+      if (this.#only[j] !== MIXED) continue;
+      let exponent = this.#exponents[j]!;
+      let most = Infinity;
+      let numbers = 0;
+      for (let i = 0; i <= last; i++) {
+        const number = this.#numbers[j * this.#size + i]!;
+        exponent += number * this.#unknowns[i]!;
+        if (i === last || number === 0) continue;
+        most = Math.min(most, this.#lnTotals[i]! - log(number));
+        numbers += number;
+      }
+      const excess = (exponent - most) / numbers;
+      if (excess <= 0) continue;
+      for (let i = 0; i < last; i++) if (this.#numbers[j * this.#size + i]! > 0) this.#unknowns[i] = this.#unknowns[i]! - excess;
+    }
   }
 
   /**
