@@ -9,6 +9,17 @@ export interface ChemicalSystem {
   readonly species: readonly SpeciesDefinition[];
   /** Total of the proton balance, mol/kg water: Σ protons·m over all species has to equal it. May be negative. */
   readonly protonTotal: number;
+  /** Solids that may be present; without them the solution may be supersaturated. */
+  readonly solids?: readonly SolidDefinition[];
+}
+
+/** A solid by its dissolution: Π a(component)^ν · a(H⁺)^protons · a(H₂O)^water = K. */
+export interface SolidDefinition {
+  readonly id: string;
+  readonly lnK: number;
+  readonly protons: number;
+  readonly water: number;
+  readonly stoichiometry: readonly (readonly [component: number, number: number])[];
 }
 
 export interface Component {

@@ -1,19 +1,15 @@
-import { exp, LN10, log } from '../quantities/reproducible-math.js';
-import type { ChemicalSystem } from './chemical-system.js';
+import { exp, log } from '../quantities/reproducible-math.js';
+import type { ChemicalSystem, SolidDefinition } from './chemical-system.js';
 import { solveScaled } from './linear-algebra.js';
+import { SaturationConstraint } from './saturation.js';
+import { boundMixedSpecies, meanProtonation, NONE, MIXED, startingPoint, type BalanceArrays } from './starting-point.js';
 
 /** Largest Newton step in a natural logarithm. */
 const LARGEST_STEP = 6;
 const MOST_STEPS = 200;
 const GRADIENT_TOLERANCE = 1e-13;
 const STEP_TOLERANCE = 1e-14;
-/** Steps of the bisection that finds the starting pH, between the limits below. */
-const ESTIMATE_STEPS = 10;
-const LOWEST_PH = -3;
-const HIGHEST_PH = 18;
-/** In place of a component's column: a species of none (H⁺, OH⁻, those held), and one of several. */
-const NONE = -2;
-const MIXED = -1;
+const NO_COLUMNS = new Int32Array(0);
 
 /**
  * All balances at fixed activity coefficients, as one convex problem.
@@ -34,15 +30,19 @@ export class MassBalances {
   readonly #size: number;
   /** Row-major species × unknowns; the last unknown is the proton. */
   readonly #numbers: Float64Array;
+  /** The same with the unknowns that saturation determines taken out; the same array while there are no solids. */
+  #active: Float64Array;
+  #saturation: { readonly constraint: SaturationConstraint; readonly solids: readonly SolidDefinition[]; offsets: Float64Array } | undefined;
   readonly #protons: Float64Array;
   readonly #constants: Float64Array;
   readonly #totals: Float64Array;
+  #activeTotals: Float64Array;
   readonly #unknowns: Float64Array;
   readonly #shift: Float64Array;
   readonly #exponents: Float64Array;
+  #lnWater = 0;
   readonly #lnTotals: Float64Array;
-  /** Column of the only component in each species. */
-  readonly #only: Int32Array;
+  readonly #arrays: BalanceArrays;
   /** Molality of the species that take part in no reaction, 0 for all others. */
   readonly #fixed: Float64Array;
   readonly #gradient: Float64Array;
@@ -62,6 +62,7 @@ export class MassBalances {
     const size = this.#free.length + 1;
     this.#size = size;
     this.#numbers = new Float64Array(count * size);
+    this.#active = this.#numbers;
     this.#protons = new Float64Array(count);
     this.#fixed = new Float64Array(count);
     this.#constants = new Float64Array(count);
@@ -77,13 +78,14 @@ export class MassBalances {
       this.#constants[j] = constant;
       this.#protons[j] = species.protons;
     }
-    this.#only = new Int32Array(count);
+    const only = new Int32Array(count);
     for (let j = 0; j < count; j++) {
       const own = system.species[j]!.stoichiometry.filter(([component]) => column[component]! >= 0);
       const [first] = own;
-      this.#only[j] = first === undefined ? NONE : own.length === 1 ? (column[first[0]] ?? NONE) : MIXED;
+      only[j] = first === undefined ? NONE : own.length === 1 ? (column[first[0]] ?? NONE) : MIXED;
     }
     this.#totals = new Float64Array(size);
+    this.#activeTotals = this.#totals;
     this.#lnTotals = new Float64Array(size);
     this.#free.forEach((component, i) => {
       const { total } = system.components[component]!;
@@ -100,6 +102,17 @@ export class MassBalances {
     this.#step = new Float64Array(size);
     this.#trial = new Float64Array(size);
     this.#scale = new Float64Array(size);
+    this.#arrays = {
+      size,
+      numbers: this.#numbers,
+      protons: this.#protons,
+      exponents: this.#exponents,
+      only,
+      lnTotals: this.#lnTotals,
+      fixed: this.#fixed,
+      molality: this.molality,
+      unknowns: this.#unknowns,
+    };
   }
 
   get lnProtonActivity(): number {
@@ -121,56 +134,15 @@ export class MassBalances {
   estimate(lnGamma: Float64Array): void {
     this.#setShift(null);
     this.#setExponents(lnGamma);
-    let low = LOWEST_PH;
-    let high = HIGHEST_PH;
-    for (let step = 0; step < ESTIMATE_STEPS; step++) {
-      const middle = (low + high) / 2;
-      // More protons bound than there are: the real pH is higher.
-      if (this.#simpleProtonBalance(-middle * LN10) > this.#system.protonTotal) low = middle;
-      else high = middle;
-    }
-    const y = (-(low + high) / 2) * LN10;
-    this.#simpleProtonBalance(y);
+    const y = startingPoint(this.#arrays, this.#system.protonTotal);
+    const mean = meanProtonation(this.#arrays);
     const last = this.#size - 1;
-    const mean = new Float64Array(this.#size);
-    for (let i = 0; i < last; i++) {
-      let bound = 0;
-      let total = 0;
-      for (let j = 0; j < this.molality.length; j++) {
-        const number = this.#numbers[j * this.#size + i]!;
-        if (number === 0) continue;
-        bound += this.molality[j]! * this.#protons[j]!;
-        total += this.molality[j]! * number;
-      }
-      mean[i] = total > 0 ? bound / total : 0;
-    }
     for (let i = 0; i < last; i++) this.#unknowns[i] = this.#unknowns[i]! + mean[i]! * y;
     this.#unknowns[last] = y;
     this.#setShift(mean);
     this.#setExponents(lnGamma);
-    this.#boundMixedSpecies();
+    boundMixedSpecies(this.#arrays);
     this.#evaluate(this.#unknowns);
-  }
-
-  /** Lowers the activities of the components of every complex that by itself would hold more of one than there is. */
-  #boundMixedSpecies(): void {
-    const last = this.#size - 1;
-    for (let j = 0; j < this.molality.length; j++) {
-      if (this.#only[j] !== MIXED) continue;
-      let exponent = this.#exponents[j]!;
-      let most = Infinity;
-      let numbers = 0;
-      for (let i = 0; i <= last; i++) {
-        const number = this.#numbers[j * this.#size + i]!;
-        exponent += number * this.#unknowns[i]!;
-        if (i === last || number === 0) continue;
-        most = Math.min(most, this.#lnTotals[i]! - log(number));
-        numbers += number;
-      }
-      const excess = (exponent - most) / numbers;
-      if (excess <= 0) continue;
-      for (let i = 0; i < last; i++) if (this.#numbers[j * this.#size + i]! > 0) this.#unknowns[i] = this.#unknowns[i]! - excess;
-    }
   }
 
   /**
@@ -180,6 +152,11 @@ export class MassBalances {
    */
   minimise(lnGamma: Float64Array, tolerance: number): void {
     this.#setExponents(lnGamma);
+    this.#descend(tolerance);
+    if (this.#saturation) this.#saturation.constraint.complete(this.#unknowns, this.#saturation.offsets);
+  }
+
+  #descend(tolerance: number): void {
     const size = this.#size;
     const enough = Math.max(tolerance, GRADIENT_TOLERANCE);
     this.#evaluate(this.#unknowns);
@@ -208,6 +185,71 @@ export class MassBalances {
     }
   }
 
+  /**
+   * Puts solids into equilibrium with the solution, or takes all away.
+   * @returns false when the phase rule forbids the set; nothing has changed then.
+   */
+  saturate(solids: readonly SolidDefinition[]): boolean {
+    if (solids.length === 0) {
+      this.#saturation = undefined;
+      this.#active = this.#numbers;
+      this.#activeTotals = this.#totals;
+      return true;
+    }
+    const constraint = SaturationConstraint.of(solids.map((solid) => this.#numbersOf(solid)), this.#size);
+    if (!constraint) return false;
+    this.#saturation = { constraint, solids, offsets: new Float64Array(solids.length) };
+    return true;
+  }
+
+  /** ln of ion product over solubility product. */
+  lnSaturation(solid: SolidDefinition): number {
+    const numbers = this.#numbersOf(solid);
+    let sum = solid.water * this.#lnWater - this.#lnSolubility(solid);
+    for (let i = 0; i < this.#size; i++) sum += numbers[i]! * this.#unknowns[i]!;
+    return sum;
+  }
+
+  /** mol/kg water of every solid given to {@link saturate}, in its order. */
+  solidAmounts(): Float64Array {
+    if (!this.#saturation) return new Float64Array(0);
+    const lacking = this.#totals.slice();
+    for (let j = 0; j < this.molality.length; j++) for (let i = 0; i < this.#size; i++) lacking[i] = lacking[i]! - this.#numbers[j * this.#size + i]! * this.molality[j]!;
+    return this.#saturation.constraint.amounts(lacking);
+  }
+
+  #applySaturation(): void {
+    const { constraint, solids } = this.#saturation!;
+    const lnK = Float64Array.from(solids, (solid) => this.#lnSolubility(solid) - solid.water * this.#lnWater);
+    const offsets = constraint.offsets(lnK);
+    this.#saturation!.offsets = offsets;
+    this.#active = this.#numbers.slice();
+    this.#activeTotals = this.#totals.slice();
+    for (let j = 0; j < this.molality.length; j++) this.#exponents[j] = this.#exponents[j]! + constraint.eliminate(this.#active, j * this.#size, offsets);
+    constraint.eliminate(this.#activeTotals, 0, offsets);
+    constraint.complete(this.#unknowns, offsets);
+  }
+
+  #numbersOf(solid: SolidDefinition): Float64Array {
+    const numbers = new Float64Array(this.#size);
+    let protons = solid.protons;
+    for (const [component, number] of solid.stoichiometry) {
+      const i = this.#free.indexOf(component);
+      if (i < 0) continue;
+      numbers[i] = number;
+      protons -= number * this.#shift[i]!;
+    }
+    numbers[this.#size - 1] = protons;
+    return numbers;
+  }
+
+  /** ln K with the components that are held from outside taken to the other side. */
+  #lnSolubility(solid: SolidDefinition): number {
+    let lnK = solid.lnK;
+    for (const [component, number] of solid.stoichiometry) lnK -= number * (this.#system.components[component]!.lnActivity ?? 0);
+    return lnK;
+  }
+
   /** Largest relative residual over the balances as the system states them. */
   residual(): number {
     const { components, species, protonTotal } = this.#system;
@@ -224,6 +266,16 @@ export class MassBalances {
         sizes[component] = sizes[component]! + number * m;
       }
     }
+    const amounts = this.solidAmounts();
+    this.#saturation?.solids.forEach((solid, index) => {
+      const amount = amounts[index]!;
+      protons += solid.protons * amount;
+      protonSize += Math.abs(solid.protons * amount);
+      for (const [component, number] of solid.stoichiometry) {
+        sums[component] = sums[component]! + number * amount;
+        sizes[component] = sizes[component]! + number * Math.abs(amount);
+      }
+    });
     let worst = Math.abs(protons) / protonSize;
     for (const component of this.#free) {
       const total = components[component]!.total;
@@ -252,41 +304,8 @@ export class MassBalances {
     for (let j = 0; j < this.molality.length; j++) {
       this.#exponents[j] = this.#constants[j]! - lnGamma[j]! + this.#system.species[j]!.water * lnWater;
     }
-  }
-
-  /**
-   * Proton balance at one pH with every component by itself; leaves molalities and unknowns. Mononuclear species share
-   * a component in closed form; a polynuclear one then bounds the activity so that it alone does not exceed the total.
-   */
-  #simpleProtonBalance(y: number): number {
-    const last = this.#size - 1;
-    const count = this.molality.length;
-    const largest = this.#gradient.fill(-Infinity);
-    const bound = this.#step.fill(Infinity);
-    for (let j = 0; j < count; j++) {
-      const i = this.#only[j]!;
-      if (i < 0) continue;
-      const number = this.#numbers[j * this.#size + i]!;
-      const exponent = this.#exponents[j]! + this.#protons[j]! * y;
-      if (number === 1) largest[i] = Math.max(largest[i]!, exponent);
-      else bound[i] = Math.min(bound[i]!, (this.#lnTotals[i]! - log(number) - exponent) / number);
-    }
-    const sums = this.#magnitude.fill(0);
-    for (let j = 0; j < count; j++) {
-      const i = this.#only[j]!;
-      if (i >= 0 && this.#numbers[j * this.#size + i] === 1) sums[i] = sums[i]! + exp(this.#exponents[j]! + this.#protons[j]! * y - largest[i]!);
-    }
-    for (let i = 0; i < last; i++) this.#unknowns[i] = Math.min(this.#lnTotals[i]! - log(sums[i]!) - largest[i]!, bound[i]!);
-    let balance = 0;
-    for (let j = 0; j < count; j++) {
-      const i = this.#only[j]!;
-      this.molality[j] = this.#fixed[j]!;
-      if (i === MIXED || this.#fixed[j]! > 0) continue;
-      const number = i >= 0 ? this.#numbers[j * this.#size + i]! : 0;
-      this.molality[j] = exp(this.#exponents[j]! + this.#protons[j]! * y + (i >= 0 ? number * this.#unknowns[i]! : 0));
-      balance += this.#protons[j]! * this.molality[j]!;
-    }
-    return balance;
+    this.#lnWater = lnWater;
+    if (this.#saturation) this.#applySaturation();
   }
 
   /** Molalities, gradient and sum of the terms' sizes at a point. */
@@ -298,24 +317,24 @@ export class MassBalances {
       if (this.#fixed[j]! > 0) continue;
       let exponent = this.#exponents[j]!;
       const row = j * size;
-      for (let i = 0; i < size; i++) exponent += this.#numbers[row + i]! * point[i]!;
+      for (let i = 0; i < size; i++) exponent += this.#active[row + i]! * point[i]!;
       const m = exp(exponent > 700 ? 700 : exponent);
       this.molality[j] = m;
       for (let i = 0; i < size; i++) {
-        const term = this.#numbers[row + i]! * m;
+        const term = this.#active[row + i]! * m;
         this.#gradient[i] = this.#gradient[i]! + term;
         this.#magnitude[i] = this.#magnitude[i]! + Math.abs(term);
       }
     }
     for (let i = 0; i < size; i++) {
-      this.#gradient[i] = this.#gradient[i]! - this.#totals[i]!;
-      this.#magnitude[i] = this.#magnitude[i]! + Math.abs(this.#totals[i]!);
+      this.#gradient[i] = this.#gradient[i]! - this.#activeTotals[i]!;
+      this.#magnitude[i] = this.#magnitude[i]! + Math.abs(this.#activeTotals[i]!);
     }
   }
 
   #largestGradient(): number {
     let largest = 0;
-    for (let i = 0; i < this.#size; i++) largest = Math.max(largest, Math.abs(this.#gradient[i]!) / this.#magnitude[i]!);
+    for (let i = 0; i < this.#size; i++) if (this.#magnitude[i]! > 0) largest = Math.max(largest, Math.abs(this.#gradient[i]!) / this.#magnitude[i]!);
     return largest;
   }
 
@@ -326,10 +345,11 @@ export class MassBalances {
       const row = j * size;
       const m = this.molality[j]!;
       for (let a = 0; a < size; a++) {
-        const weight = m * this.#numbers[row + a]!;
+        const weight = m * this.#active[row + a]!;
         if (weight === 0) continue;
-        for (let b = 0; b <= a; b++) this.#hessian[a * size + b] = this.#hessian[a * size + b]! + weight * this.#numbers[row + b]!;
+        for (let b = 0; b <= a; b++) this.#hessian[a * size + b] = this.#hessian[a * size + b]! + weight * this.#active[row + b]!;
       }
     }
+    for (const column of this.#saturation?.constraint.dependent ?? NO_COLUMNS) this.#hessian[column * size + column] = 1;
   }
 }

@@ -2,6 +2,7 @@ import { exp, LN10, log } from '../quantities/reproducible-math.js';
 import { AndersonAcceleration } from './anderson-acceleration.js';
 import type { ChemicalSystem, InteractionTable } from './chemical-system.js';
 import { MassBalances } from './mass-balances.js';
+import { PresentSolids } from './present-solids.js';
 import { activityCoefficients, lnWaterActivity } from './specific-interaction.js';
 
 /** The solved composition. Arrays follow the order of the system's species. */
@@ -18,6 +19,8 @@ export interface EquilibriumState {
   readonly lnWaterActivity: number;
   /** Natural logarithm of the activity of every component, in the order of the system. */
   readonly lnActivity: Float64Array;
+  /** mol/kg water of every solid of the system, in its order; 0 for those not present. */
+  readonly solidAmounts: Float64Array;
   /** Certificate: the largest residual of a mass balance or of the proton balance, relative to the sum of its terms. */
   readonly residual: number;
   readonly iterations: number;
@@ -51,38 +54,46 @@ export function solveEquilibrium(system: ChemicalSystem, table: InteractionTable
   }
   balances.estimate(coefficients);
   if (!start) activityCoefficients(table, balances.molality, coefficients);
-  const next = new Float64Array(count + 1);
-  const acceleration = new AndersonAcceleration(count + 1);
-  let ionicStrength = 0;
-  let settled = false;
-  let iterations = 0;
-  let change = 1;
-  while (iterations < MOST_ITERATIONS) {
-    iterations++;
-    balances.minimise(coefficients, BALANCE_TOLERANCE * change);
-    ionicStrength = activityCoefficients(table, balances.molality, next);
-    next[count] = lnWaterActivity(table, balances.molality);
-    change = 0;
-    for (let j = 0; j <= count; j++) change = Math.max(change, Math.abs(next[j]! - coefficients[j]!));
-    if (change < COEFFICIENT_TOLERANCE) {
-      settled = true;
-      break;
-    }
-    acceleration.advance(coefficients, next);
+  let round = settle(balances, table, coefficients);
+  let iterations = round.iterations;
+  const present = new PresentSolids(balances, system.solids ?? []);
+  while (round.settled && present.exchange()) {
+    round = settle(balances, table, coefficients);
+    iterations += round.iterations;
   }
   balances.minimise(coefficients, 0);
   const residual = balances.residual();
   return {
-    converged: settled && residual <= RESIDUAL_TOLERANCE,
+    converged: round.settled && present.decided && residual <= RESIDUAL_TOLERANCE,
     pH: -balances.lnProtonActivity / LN10,
     molality: balances.molality,
     lnGamma: coefficients.slice(0, count),
-    ionicStrength,
+    ionicStrength: round.ionicStrength,
     lnWaterActivity: coefficients[count]!,
     lnActivity: balances.componentActivities(),
+    solidAmounts: present.amounts(),
     residual,
     iterations,
   };
+}
+
+/** Brings activity coefficients and balances to agree, for the solids now present. */
+function settle(balances: MassBalances, table: InteractionTable, coefficients: Float64Array): { settled: boolean; ionicStrength: number; iterations: number } {
+  const last = coefficients.length - 1;
+  const next = new Float64Array(last + 1);
+  const acceleration = new AndersonAcceleration(last + 1);
+  let change = 1;
+  let ionicStrength = 0;
+  for (let iterations = 1; iterations <= MOST_ITERATIONS; iterations++) {
+    balances.minimise(coefficients, BALANCE_TOLERANCE * change);
+    ionicStrength = activityCoefficients(table, balances.molality, next);
+    next[last] = lnWaterActivity(table, balances.molality);
+    change = 0;
+    for (let j = 0; j <= last; j++) change = Math.max(change, Math.abs(next[j]! - coefficients[j]!));
+    if (change < COEFFICIENT_TOLERANCE) return { settled: true, ionicStrength, iterations };
+    acceleration.advance(coefficients, next);
+  }
+  return { settled: false, ionicStrength, iterations: MOST_ITERATIONS };
 }
 
 /** Activity of the solved water. */

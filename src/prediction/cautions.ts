@@ -6,6 +6,8 @@ import type { Dissolved } from './dissolve.js';
 import { formatChemical } from './plain-text.js';
 import type { Caution, Conditions } from './prediction.js';
 import type { SolvedSolution } from './predict.js';
+import type { WeakSpot } from './weak-spots.js';
+import { overSolubility, solidStatuses } from './solids.js';
 import type { Particle } from '../substances/ion-library.js';
 import { chemicalOf, type ComponentMeaning } from './solution-model.js';
 
@@ -16,6 +18,7 @@ export interface CautionInput {
   readonly conditions: Conditions;
   readonly uncertainty: number;
   readonly bufferCapacity: number;
+  readonly weakSpots: readonly WeakSpot[];
 }
 
 const LOCAL_RULES = 'Local rules and licensed practice decide.';
@@ -25,7 +28,7 @@ const GRAVITIES: readonly Caution['gravity'][] = ['danger', 'warning', 'note'];
 
 /** All cautions of a prediction, gravest first. */
 export function cautionsFor(input: CautionInput): Caution[] {
-  const cautions = [...extremePH(input), ...toxicGases(input), ...ionRemarks(input), ...complexes(input), ...validity(input), ...hardlyBuffered(input)];
+  const cautions = [...extremePH(input), ...toxicGases(input), ...ionRemarks(input), ...complexes(input), ...incompleteData(input), ...solids(input), ...validity(input), ...hardlyBuffered(input)];
   return cautions.sort((a, b) => GRAVITIES.indexOf(a.gravity) - GRAVITIES.indexOf(b.gravity));
 }
 
@@ -123,6 +126,41 @@ function nameOf(meaning: ComponentMeaning): string {
 /** Every "first other" of a complex: its metal with each of its ligands. */
 function pairsOf([metal, ...ligands]: readonly string[]): string[] {
   return ligands.map((ligand) => `${metal} ${ligand}`);
+}
+
+function incompleteData({ weakSpots }: CautionInput): Caution[] {
+  return weakSpots.map(({ code, reason }) => ({
+    code,
+    gravity: 'warning',
+    text: `The published data are incomplete: ${reason}. The uncertainty is widened.`,
+    basis: 'Scope of the data',
+  }));
+}
+
+/** Solids that lie in the vessel, that are to be expected, and solutes beyond what water holds. */
+function solids({ solved, dissolved }: CautionInput): Caution[] {
+  const cautions: Caution[] = overSolubility(dissolved).map(({ formula, putIn, soluble, temperature }) => ({
+    code: 'over-solubility',
+    gravity: 'warning',
+    text: `${formatChemical({ label: formula, charge: 0 })}: ${putIn.toFixed(0)} g in 100 g of water is more than dissolves (${soluble} g at ${temperature} °C). The pH is that of a solution that cannot be made.`,
+    basis: 'Handbook solubilities',
+  }));
+  const statuses = solidStatuses(solved);
+  for (const { name, formula, amount } of statuses.filter((status) => status.amount !== undefined)) {
+    cautions.push({ code: 'solid-present', gravity: 'note', text: `${scientific(amount!)} mol/kg lie as solid ${formatChemical({ label: formula, charge: 0 })}, ${name}.`, basis: 'Solubility product' });
+  }
+  const expected = statuses.filter(({ saturationIndex, uncertainty, forms, amount }) => amount === undefined && forms !== 'only-aged' && saturationIndex > uncertainty);
+  const readily = expected.filter(({ forms }) => forms === 'readily');
+  if (expected.length > 0) {
+    const named = (readily.length > 0 ? readily : expected).slice(0, 3).map(({ name, saturationIndex }) => `${name} (saturation index ${saturationIndex.toFixed(1)})`);
+    cautions.push({
+      code: readily.length > 0 ? 'solid-expected' : 'solid-slow',
+      gravity: readily.length > 0 ? 'warning' : 'note',
+      text: `Supersaturated with ${named.join(', ')}: ${readily.length > 0 ? 'a solid is to be expected, and the pH moves when it forms' : 'a solid may form within weeks'}.`,
+      basis: 'Solubility product',
+    });
+  }
+  return cautions;
 }
 
 function validity({ solved, conditions }: CautionInput): Caution[] {

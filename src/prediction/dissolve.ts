@@ -133,6 +133,7 @@ function understand(read: ReadSolute, molarity: number, molality: number, basis:
   const { substance, amount } = read;
   const assumptions: Remark[] = [];
   if (substance.assumed.includes('hydrate-anhydrous')) assumptions.push({ code: 'hydrate-anhydrous', text: `Taken as anhydrous; hydrates of ${substance.name ?? substance.formula} exist.` });
+  if (substance.isomers) assumptions.push({ code: 'isomer', text: `Read as ${substance.name ?? substance.formula}; ${substance.isomers.join(', ')} has the same formula.` });
   if (amount.decimalComma) assumptions.push({ code: 'decimal-comma', text: `${amount.number} was read with a decimal comma.` });
   if (amount.kind === 'molality') assumptions.push({ code: 'per-kilogram-water', text: 'mol/kg is taken per kilogram of water.' });
   if (basis === 'unknown' && molarity > NOTEWORTHY_MOLARITY) assumptions.push({ code: 'volume-unknown', text: 'The volume it takes up in solution is not known here and is left out.' });

@@ -15,6 +15,7 @@ import { dissolutionEquations, hydrolysisEquations } from './equations.js';
 import type { Conditions, Prediction } from './prediction.js';
 import { protonAccounts } from './proton-accounts.js';
 import { reasonFor } from './reason.js';
+import { formingSolids, solidStatuses } from './solids.js';
 import { solutionModel, type SolutionModel } from './solution-model.js';
 import { dominantChemicals, speciesTable, spectatorsOf } from './species-table.js';
 import { uncertaintyOf } from './uncertainty.js';
@@ -45,12 +46,12 @@ export function predict(solutes: string | readonly SoluteInput[], input: Predict
   const conditions = readConditions(input);
   const water = waterAt(conditions.temperature);
   const dissolved = dissolve(readSolutes(solutes), water, conditions.volume);
-  const without = solve(dissolved, water, undefined);
-  const withAir = solve(dissolved, water, conditions.carbonDioxide);
+  const without = solve(dissolved, water, conditions, undefined);
+  const withAir = solve(dissolved, water, conditions, conditions.carbonDioxide);
   const solved = conditions.air === 'equilibrated' ? withAir : without;
   const neutralPH = water.pKw / 2;
   const accounts = protonAccounts(dissolved.particles, solved);
-  const uncertainty = uncertaintyOf(solved, dissolved);
+  const uncertainty = uncertaintyOf(solved, dissolved, accounts);
   const pH = solved.state.pH;
   const { classification, decided } = classify(pH, neutralPH, uncertainty.standard);
   const constants = constantsUsed(solved, water);
@@ -74,15 +75,17 @@ export function predict(solutes: string | readonly SoluteInput[], input: Predict
     dominant: dominantChemicals(solved),
     spectators: spectatorsOf(dissolved),
     species: speciesTable(solved),
+    solids: solidStatuses(solved),
     reason,
-    cautions: cautionsFor({ solved, dissolved, conditions, uncertainty: uncertainty.standard, bufferCapacity: uncertainty.bufferCapacity }),
+    cautions: cautionsFor({ solved, dissolved, conditions, uncertainty: uncertainty.standard, bufferCapacity: uncertainty.bufferCapacity, weakSpots: uncertainty.weakSpots }),
     constants,
     residual: solved.state.residual,
   };
 }
 
-function solve(dissolved: Dissolved, water: Water, carbonDioxide: number | undefined): SolvedSolution {
-  const model = solutionModel(dissolved.particles, water, carbonDioxide);
+function solve(dissolved: Dissolved, water: Water, { solids }: Conditions, carbonDioxide: number | undefined): SolvedSolution {
+  const open = solutionModel(dissolved.particles, water, carbonDioxide);
+  const model = solids === 'equilibrated' ? { ...open, system: { ...open.system, solids: formingSolids(open.solids, dissolved).map(({ definition }) => definition) } } : open;
   const table = interactionTable(model.system.species, water.debyeHueckelSlope);
   const state = solveEquilibrium(model.system, table);
   if (!state.converged || !Number.isFinite(state.pH)) {
@@ -93,20 +96,25 @@ function solve(dissolved: Dissolved, water: Water, carbonDioxide: number | undef
   return { model, table, state };
 }
 
-const AIR: readonly unknown[] = ['excluded', 'equilibrated'] satisfies Conditions['air'][];
+const AIR: readonly Conditions['air'][] = ['excluded', 'equilibrated'];
+const SOLIDS: readonly Conditions['solids'][] = ['watched', 'equilibrated'];
+
+function oneOf<Value extends string>(given: unknown, values: readonly Value[], subject: string): Value {
+  const value = values.find((known) => known === given);
+  if (value !== undefined) return value;
+  throw new SoluteError([
+    problem('condition-unknown', `${subject} can be ${values.join(' or ')}; ${quote(textOf(given))} is neither.`, textOf(given), {
+      suggestions: values.map((known) => ({ value: known, reason: 'known value' })),
+    }),
+  ]);
+}
 
 /** Reads the conditions from anything a page may have passed. */
 function readConditions(input: PredictionInput | null | undefined): Conditions {
   const given = typeof input === 'object' && input !== null ? input : {};
   const temperature = readTemperature(given.temperature ?? DEFAULT_TEMPERATURE);
-  const air = given.air ?? 'excluded';
-  if (!AIR.includes(air)) {
-    throw new SoluteError([
-      problem('condition-unknown', `Air can be excluded or equilibrated; ${quote(textOf(air))} is neither.`, textOf(air), {
-        suggestions: AIR.map((value) => ({ value: String(value), reason: 'known value' })),
-      }),
-    ]);
-  }
+  const air = oneOf(given.air ?? 'excluded', AIR, 'Air');
+  const solids = oneOf(given.solids ?? 'watched', SOLIDS, 'Solids');
   const carbonDioxide = given.carbonDioxide ?? ROOM_AIR_CARBON_DIOXIDE;
   if (typeof carbonDioxide !== 'number' || !(carbonDioxide > 0 && carbonDioxide <= 1)) {
     throw new SoluteError([
@@ -114,5 +122,5 @@ function readConditions(input: PredictionInput | null | undefined): Conditions {
     ]);
   }
   const volume = given.volume ?? undefined;
-  return { temperature, air, carbonDioxide, ...(volume === undefined || volume === '' ? {} : { volume: textOf(volume) }) };
+  return { temperature, air, carbonDioxide, solids, ...(volume === undefined || volume === '' ? {} : { volume: textOf(volume) }) };
 }

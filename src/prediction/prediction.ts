@@ -8,6 +8,8 @@ export interface Conditions {
   readonly air: 'excluded' | 'equilibrated';
   /** CO2 in dry room air, mol/mol. */
   readonly carbonDioxide: number;
+  /** Whether solids may form and dissolve, or supersaturation is only reported. */
+  readonly solids: 'watched' | 'equilibrated';
   /** Final volume, for amounts that are masses or moles: "500 mL". */
   readonly volume?: string;
 }
@@ -89,6 +91,21 @@ export interface Equation {
   readonly constant?: number;
 }
 
+/** A solid that the composition can form. */
+export interface SolidStatus {
+  readonly id: string;
+  readonly formula: string;
+  readonly name: string;
+  /** log10 of ion product over solubility product: above 0 supersaturated, 0 when present. */
+  readonly saturationIndex: number;
+  /** Standard uncertainty of the solubility constant, log10. */
+  readonly uncertainty: number;
+  /** Whether a beaker gives it within hours, within weeks, or only on ageing or heating. */
+  readonly forms: 'readily' | 'slowly' | 'only-aged';
+  /** mol/kg water that lie as solid; only with solids equilibrated. */
+  readonly amount?: number;
+}
+
 /** Why an ion takes no part. */
 export interface Spectator {
   readonly chemical: Chemical;
@@ -168,6 +185,7 @@ export interface Prediction {
   readonly dominant: readonly Chemical[];
   readonly spectators: readonly Spectator[];
   readonly species: readonly Species[];
+  readonly solids: readonly SolidStatus[];
   readonly reason: Reason;
   readonly cautions: readonly Caution[];
   readonly constants: readonly ConstantUsed[];

@@ -1,12 +1,14 @@
 import { CARBON_DIOXIDE_FAMILY, lnCarbonDioxideActivity } from '../equilibrium/air.js';
-import type { ChemicalSystem, Component, SpeciesDefinition } from '../equilibrium/chemical-system.js';
+import type { ChemicalSystem, Component, SolidDefinition, SpeciesDefinition } from '../equilibrium/chemical-system.js';
 import type { Water } from '../equilibrium/water.js';
 import { LN10 } from '../quantities/reproducible-math.js';
 import { complexesOf, type Complex } from '../substances/complex-library.js';
 import { compositionOf, type Composition } from '../substances/formula.js';
-import { familyOf, metalOf, particleOf, type AcidBaseFamily, type Contribution, type MetalIon, type Particle } from '../substances/ion-library.js';
+import { partsOfContribution } from '../substances/part-index.js';
+import { solidsOf, type Solid } from '../substances/solid-library.js';
+import { familyOf, metalOf, particleOf, type AcidBaseFamily, type MetalIon, type Particle } from '../substances/ion-library.js';
 import type { Chemical } from './prediction.js';
-import { acidConstants, complexConstant, hydrolysisConstants, type ConstantHere } from './thermodynamic-constants.js';
+import { acidConstants, complexConstant, hydrolysisConstants, solubilityConstant, type ConstantHere } from './thermodynamic-constants.js';
 
 /** A particle put into the solution, from one or more solutes. */
 export interface DissolvedParticle {
@@ -39,12 +41,20 @@ export interface ComplexMeaning {
   readonly species: number;
 }
 
+/** A solid that the composition can form, as the solver sees it. */
+export interface SolidMeaning {
+  readonly solid: Solid;
+  readonly constant: ConstantHere;
+  readonly definition: SolidDefinition;
+}
+
 /** The solution as the solver sees it, with the way back to chemistry. */
 export interface SolutionModel {
   readonly system: ChemicalSystem;
   readonly species: readonly SpeciesMeaning[];
   readonly components: readonly ComponentMeaning[];
   readonly complexes: readonly ComplexMeaning[];
+  readonly solids: readonly SolidMeaning[];
   /** Species index of every ion that exchanges no proton. */
   readonly spectators: readonly number[];
 }
@@ -84,13 +94,19 @@ export function solutionModel(particles: readonly DissolvedParticle[], water: Wa
   }
   const air = carbonDioxide === undefined ? undefined : { lnActivity: lnCarbonDioxideActivity(water, carbonDioxide) };
   if (air && !families.has(CARBON_DIOXIDE_FAMILY)) families.set(CARBON_DIOXIDE_FAMILY, 0);
-  const complexes = complexesOf(metals.keys(), families.keys(), spectators.keys());
-  const ligands = new Set(complexes.flatMap(({ gives }) => Object.keys(gives.ions ?? {})));
+  const present = new Set<string>();
+  for (const key of metals.keys()) present.add(`metal ${key}`);
+  for (const key of families.keys()) present.add(`family ${key}`);
+  for (const id of spectators.keys()) present.add(`ion ${id}`);
+  const complexes = complexesOf(present);
+  const solids = solidsOf(present);
+  const binding = new Set([...complexes, ...solids].flatMap(({ gives }) => Object.keys(gives.ions ?? {})));
   const builder = new ModelBuilder(water, protons);
   for (const [key, total] of metals) builder.addMetal(metalOf(key), total);
   for (const [key, total] of families) builder.addFamily(familyOf(key), total, key === CARBON_DIOXIDE_FAMILY ? air : undefined);
-  for (const [id, total] of spectators) builder.addSpectator(particleOf(id)!, total, ligands.has(id));
+  for (const [id, total] of spectators) builder.addSpectator(particleOf(id)!, total, binding.has(id));
   for (const complex of complexes) builder.addComplex(complex);
+  for (const solid of solids) builder.addSolid(solid);
   return builder.finish();
 }
 
@@ -104,15 +120,6 @@ interface Part {
   readonly water: number;
 }
 
-/** Parts of a contribution with their number; metals first. */
-function partsOfContribution({ metals, families, ions }: Contribution): [key: string, units: number][] {
-  return [
-    ...Object.entries(metals ?? {}).map(([key, units]): [string, number] => [`metal ${key}`, units]),
-    ...Object.entries(families ?? {}).map(([key, units]): [string, number] => [`family ${key}`, units]),
-    ...Object.entries(ions ?? {}).map(([key, units]): [string, number] => [`ion ${key}`, units]),
-  ];
-}
-
 class ModelBuilder {
   readonly #water: Water;
   #protonTotal: number;
@@ -121,6 +128,7 @@ class ModelBuilder {
   readonly #species: SpeciesDefinition[] = [];
   readonly #speciesMeanings: SpeciesMeaning[] = [];
   readonly #complexes: ComplexMeaning[] = [];
+  readonly #solids: SolidMeaning[] = [];
   readonly #spectators: number[] = [];
   readonly #parts = new Map<string, Part>();
 
@@ -224,6 +232,22 @@ class ModelBuilder {
     );
   }
 
+  addSolid(solid: Solid): void {
+    const parts = partsOfContribution(solid.gives).map(([key, units]) => [this.#parts.get(key)!, units] as const);
+    const constant = solubilityConstant(solid, this.#water.temperature);
+    this.#solids.push({
+      solid,
+      constant,
+      definition: {
+        id: solid.id,
+        lnK: (constant.log10K - parts.reduce((sum, [part, units]) => sum + units * part.log10, 0)) * LN10,
+        protons: (solid.gives.protons ?? 0) + parts.reduce((sum, [part, units]) => sum + units * part.protons, 0),
+        water: solid.water + parts.reduce((sum, [part, units]) => sum + units * part.water, 0),
+        stoichiometry: parts.map(([part, units]) => [part.component, units] as const),
+      },
+    });
+  }
+
   #oxygens(key: string): number {
     const meaning = this.#meanings[this.#parts.get(key)!.component]!;
     if (meaning.kind === 'family') return elementCount(meaning.family.states.at(-1)!.formula, 'O');
@@ -241,6 +265,7 @@ class ModelBuilder {
       species: this.#speciesMeanings,
       components: this.#meanings,
       complexes: this.#complexes,
+      solids: this.#solids,
       spectators: this.#spectators,
     };
   }

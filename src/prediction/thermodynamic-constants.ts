@@ -4,6 +4,7 @@ import { waterAt } from '../equilibrium/water.js';
 import { atZeroIonicStrength } from '../equilibrium/zero-ionic-strength.js';
 import { LN10 } from '../quantities/reproducible-math.js';
 import type { Complex } from '../substances/complex-library.js';
+import type { Solid } from '../substances/solid-library.js';
 import { familyOf, type AcidBaseFamily, type MetalIon } from '../substances/ion-library.js';
 
 /** A constant brought to the solution's temperature and to zero ionic strength. */
@@ -64,8 +65,13 @@ export function complexConstant(complex: Complex, chargeSquares: number, celsius
   return moved(log10K, complex, celsius, GRADES[`complex${complex.grade}`], protonationShift(complex, celsius));
 }
 
+/** log10 K of dissolution of a solid. Where the enthalpy is unknown, K counted with OH⁻ instead of H⁺ is held. */
+export function solubilityConstant(solid: Solid, celsius: number): ConstantHere {
+  return moved(solid.logK, solid, celsius, GRADES[`solid${solid.grade}`], -protonationShift(solid, celsius));
+}
+
 /** Change of log10 K from the reference temperature that the protons of a complex alone bring. */
-function protonationShift({ gives, temperature }: Complex, celsius: number): number {
+function protonationShift({ gives, temperature }: Pick<Complex, 'gives' | 'temperature'>, celsius: number): number {
   const protons = gives.protons ?? 0;
   if (protons <= 0 || !gives.families) return protons * (waterAt(celsius).pKw - waterAt(temperature).pKw);
   const [key, units] = Object.entries(gives.families)[0]!;

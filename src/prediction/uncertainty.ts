@@ -5,6 +5,8 @@ import { LN10 } from '../quantities/reproducible-math.js';
 import type { Dissolved, DissolvedSolute } from './dissolve.js';
 import { formatChemical } from './plain-text.js';
 import type { UncertaintyContribution } from './prediction.js';
+import type { ProtonAccounts } from './proton-accounts.js';
+import { weakSpotsOf, type WeakSpot } from './weak-spots.js';
 import type { SolvedSolution } from './predict.js';
 import type { Contribution } from '../substances/ion-library.js';
 import type { ComponentMeaning } from './solution-model.js';
@@ -15,6 +17,8 @@ export interface UncertaintyResult {
   readonly budget: UncertaintyContribution[];
   /** mol/kg per pH unit. */
   readonly bufferCapacity: number;
+  /** Gaps in the data that matter here. */
+  readonly weakSpots: readonly WeakSpot[];
 }
 
 type Line = Omit<UncertaintyContribution, 'share'>;
@@ -29,21 +33,24 @@ const DENSITY = { none: 0, ...conventions.densityUncertainty.relativePerMolality
  * eq. 10), with the exact sensitivities of the solved balances: constants, amounts as typed, interaction coefficients,
  * the convention of the pH scale, and the density taken for the solution.
  */
-export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved): UncertaintyResult {
+export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved, accounts: ProtonAccounts): UncertaintyResult {
   const slopes = sensitivities(solved.model.system, solved.table, solved.state);
-  if (!slopes) return { standard: Infinity, budget: [], bufferCapacity: 0 };
+  if (!slopes) return { standard: Infinity, budget: [], bufferCapacity: 0, weakSpots: [] };
+  const bufferCapacity = -1 / slopes.toProtonTotal;
+  const weakSpots = weakSpotsOf(solved, accounts, bufferCapacity);
   const lines: Line[] = [
     ...solved.model.components.flatMap((meaning) => constantLines(meaning, slopes)),
     ...complexLines(solved, slopes),
     ...dissolved.solutes.map((solute) => amountLine(solute, solved, slopes)),
     ...modelLines(solved, dissolved, slopes),
+    ...weakSpots.map(({ reason, contribution }): Line => ({ of: `incomplete data: ${reason}`, kind: 'model', contribution, basis: 'model' })),
   ];
   const variance = lines.reduce((sum, line) => sum + line.contribution * line.contribution, 0);
   const budget = lines
     .map((line) => ({ ...line, share: variance > 0 ? (line.contribution * line.contribution) / variance : 0 }))
     .filter((line) => line.share >= SMALLEST_SHARE)
     .sort((a, b) => b.share - a.share);
-  return { standard: Math.sqrt(variance), budget, bufferCapacity: -1 / slopes.toProtonTotal };
+  return { standard: Math.sqrt(variance), budget, bufferCapacity, weakSpots };
 }
 
 function constantLines(meaning: ComponentMeaning, slopes: Sensitivities): Line[] {

@@ -1,4 +1,4 @@
-const PATTERN = /^(?:cas(?:\s*(?:rn|no\.?|number))?[\s:#]*)?(\d{2,7})[-\u2010-\u2013\u2212](\d{2})[-\u2010-\u2013\u2212](\d)$/i;
+const PATTERN = /^(?:cas(?:[\s-]*(?:rn|nr\.?|no\.?|number))?[\s:#]*)?(\d{2,7})[-\u2010-\u2013\u2212](\d{2})[-\u2010-\u2013\u2212](\d)$/i;
 
 /** The CAS Registry Number in a text, with plain hyphens; undefined when the text is none. */
 export function readCasNumber(text: string): string | undefined {

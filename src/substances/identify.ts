@@ -4,7 +4,7 @@ import { compositionKey, compositionOf, molarMass, parseFormula, plainFormula, t
 import { nameOfParts, partsOfName } from './salt-names.js';
 import { splitHydrateWord } from './names.js';
 import { splitIntoIons, type Parts } from './split-into-ions.js';
-import { comparableNames, partsOf, substanceOfCas, substanceOfName, substancesOfFormula, type ListedSubstance } from './substance-library.js';
+import { comparableNames, hasHydrates, partsOf, substanceOfCas, substanceOfName, substancesOfFormula, type ListedSubstance } from './substance-library.js';
 import { similarSubstances } from './similar-substances.js';
 
 /** A substance that was recognised. */
@@ -21,7 +21,9 @@ export interface IdentifiedSubstance {
   readonly anhydrousMass: number;
   readonly parts: Parts;
   /** Codes of what was taken for granted. */
-  readonly assumed: readonly ('hydrate-anhydrous' | 'split-by-composition' | 'named-from-ions')[];
+  readonly assumed: readonly ('hydrate-anhydrous' | 'split-by-composition' | 'named-from-ions' | 'isomer')[];
+  /** Names of other substances of the same formula. */
+  readonly isomers?: readonly string[];
 }
 
 /** Why a text was not recognised; becomes a problem with a position. */
@@ -40,20 +42,26 @@ export interface NotIdentified {
 export function identifySubstance(text: string): IdentifiedSubstance | NotIdentified {
   const cas = readCasNumber(text);
   if (cas !== undefined) return identifyCas(cas);
-  const listed = listedByFormula(text);
-  if (listed) return fromList(listed);
-  const named = substanceOfName(text);
-  if (named) return fromList(named, true);
   const formula = parseFormula(text);
+  const named = substanceOfName(text);
+  // "BeS" is beryllium sulfide, not the buffer BES: a formula as typed yields only to a name in the same letters.
+  if (named && ('failure' in formula || named.names.includes(text))) return fromList(named, true);
   if (!('failure' in formula)) return identifyFormula(text, formula);
-  const composed = identifyName(text);
-  if (composed) return composed;
-  return notRecognised(text, formula);
+  if (WATER_NAMES.has(text.toLowerCase())) return solvent(text);
+  return identifyName(text) ?? notRecognised(text, formula);
+}
+
+const WATER_NAMES: ReadonlySet<string> = new Set(['water', 'oxidane', 'deionised water', 'deionized water', 'distilled water']);
+const WATER_CAS = '7732-18-5';
+
+function solvent(text: string): NotIdentified {
+  return { code: 'not-aqueous', text: `${quote(text)} is the solvent. Leave it out, or name what is dissolved in it.`, suggestions: [] };
 }
 
 function identifyCas(cas: string): IdentifiedSubstance | NotIdentified {
   const substance = substanceOfCas(cas);
   if (substance) return fromList(substance);
+  if (cas === WATER_CAS) return solvent(cas);
   if (!hasValidCheckDigit(cas)) {
     const near = similarSubstances.byCas(cas);
     return {
@@ -65,37 +73,18 @@ function identifyCas(cas: string): IdentifiedSubstance | NotIdentified {
   return { code: 'cas-unknown', text: `The CAS Registry Number ${quote(cas)} is well formed but not in the list. Write the formula instead, for example NH4Cl.`, suggestions: [] };
 }
 
-function listedByFormula(text: string): ListedSubstance | undefined {
-  const exact = substancesOfFormula(text);
-  return exact.length === 1 ? exact[0] : undefined;
-}
-
 function identifyFormula(text: string, formula: Formula): IdentifiedSubstance | NotIdentified {
   if (formula.charge !== 0) return loneIon(text, formula);
+  if (compositionKey(formula.composition) === 'H2 O1') return solvent(text);
   const listed = substancesOfFormula(formula.canonical);
-  if (listed.length === 1) return fromList(listed[0]!);
-  const waterFree = withoutWater(formula);
-  const readings = splitIntoIons(waterFree);
-  const chosen = readings.length > 1 ? bestWritten(readings, formula) : readings;
-  if (chosen.length === 1) {
-    const parts = chosen[0]!;
-    const name = nameOfParts(parts, formula.hydrateWater);
-    return {
-      formula: formula.canonical,
-      ...(name === undefined ? {} : { name }),
-      hydrateWater: formula.hydrateWater,
-      composition: formula.composition,
-      molarMass: molarMass(formula.composition),
-      anhydrousMass: molarMass(waterFree),
-      parts,
-      assumed: ['split-by-composition'],
-    };
-  }
+  if (listed.length === 1) return withIsomers(fromList(listed[0]!), formula);
+  const readings = splitIntoIons(withoutWater(formula));
+  const chosen = bestWritten(readings, formula);
+  if (chosen.length === 1) return fromParts(chosen[0]!, formula);
   if (chosen.length > 1) {
     const suggestions = chosen.slice(0, 6).map((parts) => ({ value: nameOfParts(parts, formula.hydrateWater) ?? formula.canonical, reason: 'same formula' }));
     return { code: 'substance-ambiguous', text: `${quote(text)} fits more than one substance: ${suggestions.map((suggestion) => suggestion.value).join(', ')}. Write the name.`, suggestions };
   }
-  if (compositionKey(formula.composition) === 'H2 O1') return { code: 'not-aqueous', text: `${quote(text)} is the solvent. Leave it out, or name what is dissolved in it.`, suggestions: [] };
   const suggestions = similarSubstances.byFormula(formula.canonical);
   return {
     code: 'substance-unknown',
@@ -104,14 +93,56 @@ function identifyFormula(text: string, formula: Formula): IdentifiedSubstance | 
   };
 }
 
-/** Of several readings, those whose ions are written out in the formula as typed. */
-function bestWritten(readings: Parts[], formula: Formula): Parts[] {
-  const scores = readings.map((parts) =>
-    parts.reduce((sum, { particle }) => sum + (particle.written.find((fragment) => formula.anhydrous.includes(fragment))?.length ?? 0), 0),
+function fromParts(parts: Parts, formula: Formula): IdentifiedSubstance {
+  const name = nameOfParts(parts, formula.hydrateWater);
+  return {
+    formula: formula.canonical,
+    ...(name === undefined ? {} : { name }),
+    hydrateWater: formula.hydrateWater,
+    composition: formula.composition,
+    molarMass: molarMass(formula.composition),
+    anhydrousMass: molarMass(withoutWater(formula)),
+    parts,
+    assumed: ['split-by-composition'],
+  };
+}
+
+const ISOMERS = new Map<string, readonly string[]>();
+
+/** A listed substance with the names of others that have its very formula. */
+function withIsomers(substance: IdentifiedSubstance, formula: Formula): IdentifiedSubstance {
+  let isomers = ISOMERS.get(substance.formula);
+  if (!isomers) {
+    isomers = bestWritten(splitIntoIons(withoutWater(formula)), formula)
+      .filter((parts) => !sameChemistry(parts, substance.parts))
+      .flatMap((parts) => nameOfParts(parts, formula.hydrateWater) ?? []);
+    ISOMERS.set(substance.formula, isomers);
+  }
+  return isomers.length === 0 ? substance : { ...substance, assumed: [...substance.assumed, 'isomer'], isomers };
+}
+
+/** The shortest fragment that tells an ion of several atoms. */
+const TELLING_FRAGMENT = 3;
+
+/**
+ * Of several readings, those whose ions are written out in the formula as typed. Three kinds of ion are believed only
+ * where each anion stands there as such.
+ */
+function bestWritten(readings: Parts[], { anhydrous, canonical }: Formula): Parts[] {
+  const text = canonical.includes('·') ? canonical : anhydrous;
+  const believable = readings.filter((parts) => parts.length < 3 || parts.every(({ particle }) => particle.charge >= 0 || particle.written.some((fragment) => text.includes(fragment))));
+  if (believable.length <= 1) return believable;
+  const scores = believable.map((parts) =>
+    parts.reduce((sum, { particle }) => {
+      const fragment = particle.written.find((written) => text.includes(written)) ?? '';
+      return sum + (fragment.length >= TELLING_FRAGMENT ? fragment.length : 0);
+    }, 0),
   );
   const best = Math.max(...scores);
-  const chosen = readings.filter((_, index) => scores[index] === best);
-  return chosen.length > 1 && chosen.every((parts) => sameChemistry(parts, chosen[0]!)) ? [chosen[0]!] : chosen;
+  const chosen = believable.filter((_, index) => scores[index] === best);
+  const whole = chosen.filter((parts) => parts.length === 1);
+  const preferred = whole.length > 0 ? whole : chosen;
+  return preferred.every((parts) => sameChemistry(parts, preferred[0]!)) ? [preferred[0]!] : preferred;
 }
 
 function sameChemistry(a: Parts, b: Parts): boolean {
@@ -146,7 +177,7 @@ function identifyName(text: string): IdentifiedSubstance | NotIdentified | undef
   if (!reading) return undefined;
   const hydrateWater = water ?? 0;
   const formula = hydrateWater === 0 ? reading.formula : `${reading.formula}·${hydrateWater === 1 ? '' : hydrateWater}H2O`;
-  const same = substancesOfFormula(formula);
+  const same = substancesOfFormula(formula).filter((substance) => sameChemistry(partsOf(substance.parts), reading.parts));
   if (same.length === 1) return fromList(same[0]!, water === undefined);
   const composition = compositionOf(formula);
   const name = nameOfParts(reading.parts, hydrateWater);
@@ -158,7 +189,7 @@ function identifyName(text: string): IdentifiedSubstance | NotIdentified | undef
     molarMass: molarMass(composition),
     anhydrousMass: molarMass(compositionOf(reading.formula)),
     parts: reading.parts,
-    assumed: water === undefined ? ['named-from-ions', 'hydrate-anhydrous'] : ['named-from-ions'],
+    assumed: water === undefined && hasHydrates(reading.formula) ? ['named-from-ions', 'hydrate-anhydrous'] : ['named-from-ions'],
   };
 }
 
@@ -182,14 +213,7 @@ function fromList(substance: ListedSubstance, unhydratedName = false): Identifie
     };
     IDENTIFIED.set(substance, identified);
   }
-  return unhydratedName && identified.hydrateWater === 0 && hasHydrates(substance) ? { ...identified, assumed: ['hydrate-anhydrous'] } : identified;
-}
-
-function hasHydrates(substance: ListedSubstance): boolean {
-  const stem = substance.names[0]!;
-  return ['hydrate', 'monohydrate', 'dihydrate', 'trihydrate', 'hexahydrate', 'heptahydrate', 'decahydrate', 'dodecahydrate', 'pentahydrate', 'tetrahydrate', 'nonahydrate'].some(
-    (word) => substanceOfName(`${stem} ${word}`) !== undefined,
-  );
+  return unhydratedName && identified.hydrateWater === 0 && hasHydrates(substance.formula) ? { ...identified, assumed: ['hydrate-anhydrous'] } : identified;
 }
 
 function loneIon(text: string, formula: Formula): NotIdentified {

@@ -32,6 +32,8 @@ export interface Particle {
   readonly spectator?: SpectatorReason;
   /** Why no prediction is made for it. */
   readonly refused?: string;
+  /** Cations with which a composition is read as containing it; absent for any. */
+  readonly onlyWith?: readonly string[];
   readonly cautions: readonly string[];
 }
 
@@ -45,6 +47,7 @@ interface IonRow {
   readonly gives?: Contribution;
   readonly spectator?: SpectatorReason;
   readonly refused?: string;
+  readonly onlyWith?: readonly string[];
   readonly caution?: readonly string[];
 }
 

@@ -8,17 +8,22 @@ const CATIONS: readonly Particle[] = [...allParticles()].filter((particle) => pa
 const MOST_OF_ONE = 24;
 const PROTON = 'H+';
 
+/** Atoms above which only one cation with one anion is looked for. */
+const MOST_ATOMS = 250;
+
 /**
- * All ways to read a composition as one or two cations and one anion, or two anions and one cation, charge zero; or as
- * one neutral molecule. Readings with fewer kinds of ion come first, and hide those that need a free proton.
+ * All ways to read a composition: as a molecule, as one cation and one anion, else as three kinds of ion, charge zero.
+ * Readings that need a free proton are hidden by others.
  */
 export function splitIntoIons(composition: Composition): Parts[] {
   const whole: Parts[] = particlesOfComposition(compositionKey(composition))
     .filter((particle) => particle.charge === 0)
     .map((particle) => [{ particle, count: 1 }]);
-  if (whole.length > 0) return whole;
-  const simple = saltsOf(composition, 0, []);
-  if (simple.length > 0) return preferWithoutProton(simple);
+  const simple = preferWithoutProton([...whole, ...saltsOf(composition, 0, [])].filter(isUsual));
+  if (simple.length > 0) return simple;
+  let atoms = 0;
+  for (const count of composition.values()) atoms += count;
+  if (atoms > MOST_ATOMS) return [];
   const double: Parts[] = [];
   const seen = new Set<string>();
   for (const { particle, count, rest } of takeCations(composition)) {
@@ -29,8 +34,13 @@ export function splitIntoIons(composition: Composition): Parts[] {
       seen.add(key);
     }
   }
-  if (double.length > 0) return preferWithoutProton(double);
-  return twoAnions(composition);
+  const usual = preferWithoutProton(double.filter(isUsual));
+  return usual.length > 0 ? usual : twoAnions(composition).filter(isUsual);
+}
+
+/** False for an anion that exists with some cations only, beside another. */
+function isUsual(parts: Parts): boolean {
+  return parts.every(({ particle }) => particle.onlyWith === undefined || parts.every((other) => other.particle.charge <= 0 || particle.onlyWith!.includes(other.particle.id)));
 }
 
 function preferWithoutProton(readings: Parts[]): Parts[] {

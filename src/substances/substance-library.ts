@@ -18,8 +18,11 @@ const LIST: readonly ListedSubstance[] = (substances.rows as unknown as Row[]).m
 const BY_FORMULA = new Map<string, ListedSubstance[]>();
 const BY_NAME = new Map<string, ListedSubstance>();
 const BY_CAS = new Map<string, ListedSubstance>();
+/** Formulas of which a hydrate is listed. */
+const HYDRATED = new Set<string>();
 for (const substance of LIST) {
   BY_FORMULA.set(substance.formula, [...(BY_FORMULA.get(substance.formula) ?? []), substance]);
+  if (substance.formula.includes('·')) HYDRATED.add(substance.formula.split('·')[0]!);
   if (substance.cas !== null) BY_CAS.set(substance.cas, substance);
   for (const name of substance.names) {
     const key = comparableName(name);
@@ -43,6 +46,11 @@ export function substanceOfName(name: string): ListedSubstance | undefined {
 
 export function substanceOfCas(cas: string): ListedSubstance | undefined {
   return BY_CAS.get(cas);
+}
+
+/** True when the list holds a hydrate of this anhydrous formula. */
+export function hasHydrates(formula: string): boolean {
+  return HYDRATED.has(formula);
 }
 
 /** Every comparable name of the list, for suggestions. */

@@ -1,0 +1,2 @@
+/** Version of the package. */
+export const version = '0.1.0';

@@ -1,0 +1,85 @@
+import { formatEquation, type Conditions, type Prediction } from '../engine.js';
+import { classificationText } from './announcements.js';
+import { sorted } from './cautions.js';
+import { chemicalMarkup, escapeMarkup, formulaMarkup } from './chemical.js';
+import type { Numbers } from './numbers.js';
+import type { Outcome } from './outcome.js';
+import { otherAir } from './scale.js';
+import { english as strings } from './strings/english.js';
+
+/** Temperature and air in words. */
+export function conditionsText({ temperature, air }: Pick<Conditions, 'temperature' | 'air'>, numbers: Numbers): string {
+  return strings.text.conditions(strings.temperature(numbers.plain(temperature)), strings.air[air]);
+}
+
+/** pH under the other condition of air as a phrase, when it differs by more than the uncertainty. */
+export function otherAirText(prediction: Prediction, numbers: Numbers): string | undefined {
+  const other = otherAir(prediction);
+  if (other === undefined) return undefined;
+  const value = numbers.pH(other, Math.max(prediction.uncertainty, 0.02));
+  return prediction.conditions.air === 'excluded' ? strings.inRoomAir(value) : strings.withoutAir(value);
+}
+
+function resultText(prediction: Prediction, numbers: Numbers): string {
+  const { pH, uncertainty } = prediction;
+  return strings.text.result(numbers.pH(pH, uncertainty), numbers.uncertainty(uncertainty), classificationText(prediction));
+}
+
+function soluteText(solute: Prediction['understood'][number], numbers: Numbers): string {
+  const { formula, name, molarity } = solute;
+  return `${name ? `${formula} (${name})` : formula} ${strings.molarity(numbers.amount(molarity) ?? molarity.toExponential(2))}`;
+}
+
+/** The result as plain sentences, one a line. */
+export function writeText(outcome: Outcome, label: string, numbers: Numbers): string {
+  if (outcome.state === 'empty') return '';
+  const heading = label ? [`${label}.`] : [];
+  if (outcome.state === 'problem') {
+    return [...heading, strings.text.noPrediction, ...outcome.problems.map(({ text }) => text)].join('\n');
+  }
+  const { prediction } = outcome;
+  const other = otherAirText(prediction, numbers);
+  return [
+    ...heading,
+    `${resultText(prediction, numbers)}, ${conditionsText(prediction.conditions, numbers)}.`,
+    ...(other ? [`${other}.`] : []),
+    `${prediction.understood.map((solute) => soluteText(solute, numbers)).join('; ')}.`,
+    prediction.reason.text,
+    ...prediction.hydrolysis.filter(({ decides }) => decides).map((equation) => `${formatEquation(equation)}.`),
+    ...sorted(prediction.cautions).map(({ gravity, text }) => `${strings.cautions.gravity[gravity]}: ${text}`),
+    strings.text.standard,
+  ].join('\n');
+}
+
+/** The result as semantic HTML without styles, scripts or identifiers; everything from outside is escaped. */
+export function writeMarkup(outcome: Outcome, label: string, numbers: Numbers): string {
+  if (outcome.state === 'empty') return '';
+  const heading = label ? `<p><strong>${escapeMarkup(label)}</strong></p>` : '';
+  if (outcome.state === 'problem') {
+    return `<section lang="${strings.language}">${heading}<p>${strings.text.noPrediction}</p>${list(outcome.problems.map(({ text }) => escapeMarkup(text)))}</section>`;
+  }
+  const { prediction } = outcome;
+  const other = otherAirText(prediction, numbers);
+  const equations = [...prediction.dissociation, ...prediction.hydrolysis].map((equation) => {
+    const side = (terms: typeof equation.reactants) =>
+      terms.map(({ coefficient, chemical }) => `${coefficient === 1 ? '' : `${coefficient} `}${chemicalMarkup(chemical)}`).join(' + ');
+    const { symbol, pK, decides } = equation;
+    const constant = symbol && pK !== undefined ? ` (p${escapeMarkup(symbol)} ${numbers.fixed(pK, 2)})` : '';
+    return `${side(equation.reactants)} ${equation.arrow === 'complete' ? '→' : '⇌'} ${side(equation.products)}${constant}${decides ? `, ${strings.equations.decides}` : ''}`;
+  });
+  return [
+    `<section lang="${strings.language}">`,
+    heading,
+    `<p><strong>${escapeMarkup(resultText(prediction, numbers))}</strong>, ${escapeMarkup(conditionsText(prediction.conditions, numbers))}. ${strings.text.standard}</p>`,
+    other ? `<p>${escapeMarkup(other)}</p>` : '',
+    list(prediction.understood.map((solute) => `${formulaMarkup(solute.formula)}${solute.name ? ` (${escapeMarkup(solute.name)})` : ''}: ${escapeMarkup(strings.molarity(numbers.amount(solute.molarity) ?? solute.molarity.toExponential(2)))}`)),
+    `<p>${escapeMarkup(prediction.reason.text)}</p>`,
+    list(equations),
+    list(sorted(prediction.cautions).map(({ gravity, text }) => `<strong>${strings.cautions.gravity[gravity]}.</strong> ${escapeMarkup(text)}`)),
+    '</section>',
+  ].join('');
+}
+
+function list(items: readonly string[]): string {
+  return items.length === 0 ? '' : `<ul>${items.map((item) => `<li>${item}</li>`).join('')}</ul>`;
+}
