@@ -9,6 +9,8 @@ export interface ChemicalSystem {
   readonly species: readonly SpeciesDefinition[];
   /** Total of the proton balance, mol/kg water: Σ protons·m over all species has to equal it. May be negative. */
   readonly protonTotal: number;
+  /** The same object in all systems that differ in amounts only, so that what follows from the rest is worked out once. */
+  readonly structure?: object;
   /** Solids that may be present; without them the solution may be supersaturated. */
   readonly solids?: readonly SolidDefinition[];
 }
@@ -50,6 +52,8 @@ export interface InteractionTable {
   readonly charges: Float64Array;
   /** Specific interaction coefficients ε(j,k), kg/mol, row-major, symmetric; zero for like charges and neutrals. */
   readonly epsilon: Float64Array;
+  /** The same as a list of the pairs that are not zero. */
+  readonly pairs: { readonly cation: Int32Array; readonly anion: Int32Array; readonly value: Float64Array };
   /** Debye–Hückel slope A, (kg/mol)^½. */
   readonly slope: number;
   /** Denominator coefficient B·a of the Debye–Hückel term, (kg/mol)^½. */

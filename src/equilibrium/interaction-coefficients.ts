@@ -61,7 +61,25 @@ export function interactionTable(species: readonly { readonly id: string; readon
       epsilon[anion * count + cation] = value;
     }
   }
-  return { charges, epsilon, slope, denominator: activity.denominator, ceiling: conventions.activityModel.heldAbove };
+  return { charges, epsilon, pairs: interactingPairs(charges, epsilon), slope, denominator: activity.denominator, ceiling: conventions.activityModel.heldAbove };
+}
+
+/** The pairs of cation and anion whose coefficient is not zero. @param epsilon row-major, symmetric. */
+export function interactingPairs(charges: Float64Array, epsilon: Float64Array): InteractionTable['pairs'] {
+  const count = charges.length;
+  const cations: number[] = [];
+  const anions: number[] = [];
+  const values: number[] = [];
+  for (let cation = 0; cation < count; cation++) {
+    for (let anion = 0; anion < count; anion++) {
+      const value = epsilon[cation * count + anion]!;
+      if (!(charges[cation]! > 0) || value === 0) continue;
+      cations.push(cation);
+      anions.push(anion);
+      values.push(value);
+    }
+  }
+  return { cation: Int32Array.from(cations), anion: Int32Array.from(anions), value: Float64Array.from(values) };
 }
 
 /** True when a published coefficient exists for the pair. */

@@ -2,7 +2,8 @@ import { exp, log } from '../quantities/reproducible-math.js';
 import type { ChemicalSystem, SolidDefinition } from './chemical-system.js';
 import { solveScaled } from './linear-algebra.js';
 import { SaturationConstraint } from './saturation.js';
-import { boundMixedSpecies, meanProtonation, NONE, MIXED, startingPoint, type BalanceArrays } from './starting-point.js';
+import { sharedStructure } from './shared-structure.js';
+import { boundMixedSpecies, meanProtonation, startingPoint, type BalanceArrays } from './starting-point.js';
 
 /** Largest Newton step in a natural logarithm. */
 const LARGEST_STEP = 6;
@@ -26,7 +27,7 @@ export class MassBalances {
   /** mol/kg, of the last point visited. */
   readonly molality: Float64Array;
   readonly #system: ChemicalSystem;
-  readonly #free: number[] = [];
+  readonly #free: readonly number[];
   readonly #size: number;
   /** Row-major species × unknowns; the last unknown is the proton. */
   readonly #numbers: Float64Array;
@@ -37,6 +38,10 @@ export class MassBalances {
   readonly #constants: Float64Array;
   readonly #totals: Float64Array;
   #activeTotals: Float64Array;
+  /** The active numbers without zeros: where each species starts, the unknown and the number of every entry. */
+  readonly #rows: Int32Array;
+  readonly #columns: Int32Array;
+  readonly #entries: Float64Array;
   readonly #unknowns: Float64Array;
   readonly #shift: Float64Array;
   readonly #exponents: Float64Array;
@@ -53,45 +58,29 @@ export class MassBalances {
   readonly #scale: Float64Array;
 
   constructor(system: ChemicalSystem) {
-    const count = system.species.length;
     this.#system = system;
-    const column = new Int32Array(system.components.length).fill(-1);
-    system.components.forEach((component, index) => {
-      if (component.lnActivity === undefined) column[index] = this.#free.push(index) - 1;
-    });
-    const size = this.#free.length + 1;
+    const shared = sharedStructure(system);
+    const count = system.species.length;
+    const size = shared.free.length + 1;
+    this.#free = shared.free;
     this.#size = size;
-    this.#numbers = new Float64Array(count * size);
+    this.#numbers = shared.numbers.slice();
     this.#active = this.#numbers;
-    this.#protons = new Float64Array(count);
+    this.#protons = shared.protons;
+    this.#constants = shared.constants;
     this.#fixed = new Float64Array(count);
-    this.#constants = new Float64Array(count);
-    for (let j = 0; j < count; j++) {
-      const species = system.species[j]!;
-      this.#fixed[j] = species.fixedMolality ?? 0;
-      if (species.fixedMolality !== undefined) continue;
-      let constant = species.lnBeta;
-      for (const [component, number] of species.stoichiometry) {
-        if (column[component]! >= 0) this.#numbers[j * size + column[component]!] = number;
-        else constant += number * system.components[component]!.lnActivity!;
-      }
-      this.#constants[j] = constant;
-      this.#protons[j] = species.protons;
-    }
-    const only = new Int32Array(count);
-    for (let j = 0; j < count; j++) {
-      const own = system.species[j]!.stoichiometry.filter(([component]) => column[component]! >= 0);
-      const [first] = own;
-      only[j] = first === undefined ? NONE : own.length === 1 ? (column[first[0]] ?? NONE) : MIXED;
-    }
+    for (const index of shared.fixed) this.#fixed[index] = system.species[index]!.fixedMolality!;
     this.#totals = new Float64Array(size);
     this.#activeTotals = this.#totals;
     this.#lnTotals = new Float64Array(size);
-    this.#free.forEach((component, i) => {
-      const { total } = system.components[component]!;
+    for (let i = 0; i < size - 1; i++) {
+      const { total } = system.components[shared.free[i]!]!;
       this.#totals[i] = total;
       this.#lnTotals[i] = log(total);
-    });
+    }
+    this.#rows = new Int32Array(count + 1);
+    this.#columns = new Int32Array(count * size);
+    this.#entries = new Float64Array(count * size);
     this.#unknowns = new Float64Array(size);
     this.#shift = new Float64Array(size);
     this.#exponents = new Float64Array(count);
@@ -107,7 +96,7 @@ export class MassBalances {
       numbers: this.#numbers,
       protons: this.#protons,
       exponents: this.#exponents,
-      only,
+      only: shared.only,
       lnTotals: this.#lnTotals,
       fixed: this.#fixed,
       molality: this.molality,
@@ -194,6 +183,7 @@ export class MassBalances {
       this.#saturation = undefined;
       this.#active = this.#numbers;
       this.#activeTotals = this.#totals;
+      this.#compress();
       return true;
     }
     const constraint = SaturationConstraint.of(solids.map((solid) => this.#numbersOf(solid)), this.#size);
@@ -227,6 +217,7 @@ export class MassBalances {
     this.#activeTotals = this.#totals.slice();
     for (let j = 0; j < this.molality.length; j++) this.#exponents[j] = this.#exponents[j]! + constraint.eliminate(this.#active, j * this.#size, offsets);
     constraint.eliminate(this.#activeTotals, 0, offsets);
+    this.#compress();
     constraint.complete(this.#unknowns, offsets);
   }
 
@@ -297,6 +288,7 @@ export class MassBalances {
       this.#numbers[j * this.#size + last] = number;
     }
     this.#totals[last] = total;
+    this.#compress();
   }
 
   #setExponents(lnGamma: Float64Array): void {
@@ -308,27 +300,45 @@ export class MassBalances {
     if (this.#saturation) this.#applySaturation();
   }
 
+  /** Lists the numbers that are not zero, species by species: most species hold two or three of the unknowns. */
+  #compress(): void {
+    const size = this.#size;
+    let entry = 0;
+    for (let j = 0; j < this.molality.length; j++) {
+      this.#rows[j] = entry;
+      if (this.#fixed[j]! > 0) continue;
+      for (let i = 0; i < size; i++) {
+        const number = this.#active[j * size + i]!;
+        if (number === 0) continue;
+        this.#columns[entry] = i;
+        this.#entries[entry++] = number;
+      }
+    }
+    this.#rows[this.molality.length] = entry;
+  }
+
   /** Molalities, gradient and sum of the terms' sizes at a point. */
   #evaluate(point: Float64Array): void {
     const size = this.#size;
-    this.#gradient.fill(0);
-    this.#magnitude.fill(0);
-    for (let j = 0; j < this.molality.length; j++) {
-      if (this.#fixed[j]! > 0) continue;
-      let exponent = this.#exponents[j]!;
-      const row = j * size;
-      for (let i = 0; i < size; i++) exponent += this.#active[row + i]! * point[i]!;
-      const m = exp(exponent > 700 ? 700 : exponent);
-      this.molality[j] = m;
-      for (let i = 0; i < size; i++) {
-        const term = this.#active[row + i]! * m;
-        this.#gradient[i] = this.#gradient[i]! + term;
-        this.#magnitude[i] = this.#magnitude[i]! + Math.abs(term);
-      }
-    }
+    const count = this.molality.length;
+    const [molality, rows, columns, entries, exponents, gradient, magnitude, fixed] = [this.molality, this.#rows, this.#columns, this.#entries, this.#exponents, this.#gradient, this.#magnitude, this.#fixed];
     for (let i = 0; i < size; i++) {
-      this.#gradient[i] = this.#gradient[i]! - this.#activeTotals[i]!;
-      this.#magnitude[i] = this.#magnitude[i]! + Math.abs(this.#activeTotals[i]!);
+      gradient[i] = -this.#activeTotals[i]!;
+      magnitude[i] = Math.abs(this.#activeTotals[i]!);
+    }
+    for (let j = 0; j < count; j++) {
+      if (fixed[j]! > 0) continue;
+      const end = rows[j + 1]!;
+      let exponent = exponents[j]!;
+      for (let entry = rows[j]!; entry < end; entry++) exponent += entries[entry]! * point[columns[entry]!]!;
+      const m = exp(exponent > 700 ? 700 : exponent);
+      molality[j] = m;
+      for (let entry = rows[j]!; entry < end; entry++) {
+        const i = columns[entry]!;
+        const term = entries[entry]! * m;
+        gradient[i] = gradient[i]! + term;
+        magnitude[i] = magnitude[i]! + Math.abs(term);
+      }
     }
   }
 
@@ -340,16 +350,21 @@ export class MassBalances {
 
   #setHessian(): void {
     const size = this.#size;
-    this.#hessian.fill(0);
-    for (let j = 0; j < this.molality.length; j++) {
-      const row = j * size;
-      const m = this.molality[j]!;
-      for (let a = 0; a < size; a++) {
-        const weight = m * this.#active[row + a]!;
-        if (weight === 0) continue;
-        for (let b = 0; b <= a; b++) this.#hessian[a * size + b] = this.#hessian[a * size + b]! + weight * this.#active[row + b]!;
+    const [molality, rows, columns, entries, hessian] = [this.molality, this.#rows, this.#columns, this.#entries, this.#hessian];
+    hessian.fill(0);
+    for (let j = 0; j < molality.length; j++) {
+      const end = rows[j + 1]!;
+      const m = molality[j]!;
+      for (let first = rows[j]!; first < end; first++) {
+        const weight = m * entries[first]!;
+        const row = columns[first]! * size;
+        // Columns rise along a row, so that this is the lower triangle.
+        for (let second = rows[j]!; second <= first; second++) {
+          const at = row + columns[second]!;
+          hessian[at] = hessian[at]! + weight * entries[second]!;
+        }
       }
     }
-    for (const column of this.#saturation?.constraint.dependent ?? NO_COLUMNS) this.#hessian[column * size + column] = 1;
+    for (const column of this.#saturation?.constraint.dependent ?? NO_COLUMNS) hessian[column * size + column] = 1;
   }
 }

@@ -25,49 +25,53 @@ export function ionicStrengthOf(molality: Float64Array, charges: Float64Array): 
   return sum / 2;
 }
 
+/** Ionic strength and what the charged pairs add up to, at the molalities scaled to the ceiling. */
+interface Medium {
+  /** mol/kg, not cut. */
+  readonly ionicStrength: number;
+  /** Factor on all molalities that brings the ionic strength down to the ceiling; 1 below it. */
+  readonly scale: number;
+}
+
+function mediumOf({ charges, ceiling }: InteractionTable, molality: Float64Array): Medium {
+  const ionicStrength = ionicStrengthOf(molality, charges);
+  return { ionicStrength, scale: ionicStrength > ceiling ? ceiling / ionicStrength : 1 };
+}
+
 /**
  * Writes ln γ of every species. Above the ceiling of ionic strength the molalities are scaled down to it, so that a
  * concentration far outside the model gives bounded coefficients (the caller states that it is outside).
  * @returns ionic strength, mol/kg, not cut.
  */
 export function activityCoefficients(table: InteractionTable, molality: Float64Array, lnGamma: Float64Array): number {
-  const { charges, epsilon, slope, denominator, ceiling } = table;
-  const count = molality.length;
-  const ionicStrength = ionicStrengthOf(molality, charges);
-  const scale = ionicStrength > ceiling ? ceiling / ionicStrength : 1;
+  const { charges, pairs, slope, denominator } = table;
+  const { ionicStrength, scale } = mediumOf(table, molality);
   const term = debyeHueckelTerm(ionicStrength * scale, slope, denominator);
-  for (let j = 0; j < count; j++) {
-    let sum = 0;
-    if (charges[j] !== 0) {
-      const row = j * count;
-      for (let k = 0; k < count; k++) sum += epsilon[row + k]! * molality[k]!;
-    }
-    lnGamma[j] = LN10 * (scale * sum - charges[j]! * charges[j]! * term);
+  for (let j = 0; j < molality.length; j++) lnGamma[j] = -LN10 * charges[j]! * charges[j]! * term;
+  for (let pair = 0; pair < pairs.value.length; pair++) {
+    const cation = pairs.cation[pair]!;
+    const anion = pairs.anion[pair]!;
+    const value = LN10 * scale * pairs.value[pair]!;
+    lnGamma[cation] = lnGamma[cation]! + value * molality[anion]!;
+    lnGamma[anion] = lnGamma[anion]! + value * molality[cation]!;
   }
   return ionicStrength;
 }
 
 /**
  * ln a(H2O) that belongs to these activity coefficients by the Gibbs–Duhem equation:
- * ln a = −M(H2O) φ Σm, (φ − 1)Σm = ln10 · (−2 I D(I) + 2 ∫₀ᴵ D dI + ½ ΣΣ ε m m).
+ * ln a = −M(H2O) φ Σm, (φ − 1)Σm = ln10 · (−2 I D(I) + 2 ∫₀ᴵ D dI + Σ ε m(cation) m(anion)).
  */
 export function lnWaterActivity(table: InteractionTable, molality: Float64Array): number {
-  const { charges, epsilon, slope, denominator: b, ceiling } = table;
-  const count = molality.length;
-  const full = ionicStrengthOf(molality, charges);
-  const scale = full > ceiling ? ceiling / full : 1;
-  const ionicStrength = full * scale;
+  const { pairs, slope, denominator: b } = table;
+  const medium = mediumOf(table, molality);
+  const ionicStrength = medium.ionicStrength * medium.scale;
   let sum = 0;
-  let pairs = 0;
-  for (let j = 0; j < count; j++) {
-    sum += molality[j]!;
-    const row = j * count;
-    let interactions = 0;
-    for (let k = 0; k < count; k++) interactions += epsilon[row + k]! * molality[k]!;
-    pairs += interactions * molality[j]!;
-  }
+  for (let j = 0; j < molality.length; j++) sum += molality[j]!;
+  let interactions = 0;
+  for (let pair = 0; pair < pairs.value.length; pair++) interactions += pairs.value[pair]! * molality[pairs.cation[pair]!]! * molality[pairs.anion[pair]!]!;
   const root = Math.sqrt(ionicStrength);
   const integral = b > 0 ? 2 * slope * (ionicStrength / (2 * b) - root / (b * b) + log(1 + b * root) / (b * b * b)) : 0;
-  const excess = LN10 * (2 * integral - 2 * ionicStrength * debyeHueckelTerm(ionicStrength, slope, b) + (scale * scale * pairs) / 2);
+  const excess = LN10 * (2 * integral - 2 * ionicStrength * debyeHueckelTerm(ionicStrength, slope, b) + medium.scale * medium.scale * interactions);
   return -WATER_MOLAR_MASS * (sum + excess);
 }

@@ -5,11 +5,12 @@ import { citationOf } from './constants-used.js';
 import type { Dissolved } from './dissolve.js';
 import { formatChemical } from './plain-text.js';
 import type { Caution, Conditions } from './prediction.js';
-import type { SolvedSolution } from './predict.js';
+import type { SolvedSolution } from './solved-solution.js';
 import type { WeakSpot } from './weak-spots.js';
 import { overSolubility, solidStatuses } from './solids.js';
 import type { Particle } from '../substances/ion-library.js';
-import { chemicalOf, type ComponentMeaning } from './solution-model.js';
+import { chemicalOf } from './chemicals.js';
+import type { ComponentMeaning } from './solution-model.js';
 
 /** What the cautions are read from. */
 export interface CautionInput {

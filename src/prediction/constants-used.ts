@@ -3,7 +3,7 @@ import water from '../../data/water.json';
 import type { Water } from '../equilibrium/water.js';
 import { formatChemical } from './plain-text.js';
 import type { ConstantUsed } from './prediction.js';
-import type { SolvedSolution } from './predict.js';
+import type { SolvedSolution } from './solved-solution.js';
 
 const CITATIONS = sources.sources as unknown as Readonly<Record<string, { citation: string }>>;
 

@@ -6,7 +6,8 @@ import { parseUnit } from '../quantities/units.js';
 import type { Water } from '../equilibrium/water.js';
 import type { ReadSolute } from '../substances/solutes-text.js';
 import type { Remark, UnderstoodSolute } from './prediction.js';
-import { chemicalOf, type DissolvedParticle } from './solution-model.js';
+import { chemicalOf } from './chemicals.js';
+import type { DissolvedParticle } from './solution-model.js';
 
 /** All solutes as particles in one kilogram of water. */
 export interface Dissolved {
@@ -51,7 +52,7 @@ export function dissolve(solutes: readonly ReadSolute[], water: Water, volume: s
       problems.push(outOfRange(read, index, molality));
       return;
     }
-    const relative = read.amount.halfDigit.div(read.amount.value).toNumber() / Math.sqrt(3);
+    const relative = read.amount.relativeHalfDigit / Math.sqrt(3);
     const basis = inMolality ? undefined : litre.bases[index]!;
     dissolved.push({ read, molality, uncertainty: molality * relative, ...(basis === undefined ? {} : { volumeBasis: basis }) });
     understood.push(understand(read, inMolality ? molality * litre.water : perLitre[index]!.toNumber(), molality, basis));

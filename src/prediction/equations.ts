@@ -6,8 +6,10 @@ import type { Complex } from '../substances/complex-library.js';
 import { familyOf, metalOf, particleOf, type AcidBaseFamily, type FamilyState } from '../substances/ion-library.js';
 import type { Dissolved } from './dissolve.js';
 import type { Chemical, ConstantUsed, Equation, EquationTerm, Reason } from './prediction.js';
-import type { SolvedSolution } from './predict.js';
-import { chemicalOf, HYDROXIDE, PROTON, waterBetween, WATER, type ComponentMeaning, type DissolvedParticle, type SpeciesMeaning } from './solution-model.js';
+import type { SolvedSolution } from './solved-solution.js';
+import { chemicalOf, HYDROXIDE, PROTON, WATER } from './chemicals.js';
+import { waterBetween } from './model-builder.js';
+import type { ComponentMeaning, DissolvedParticle, SpeciesMeaning } from './solution-model.js';
 import { componentTotals } from './species-table.js';
 
 const NEGLIGIBLE = conventions.negligibleShare;

@@ -1,24 +1,15 @@
 import { ROOM_AIR_CARBON_DIOXIDE } from '../equilibrium/air.js';
-import { interactionTable } from '../equilibrium/interaction-coefficients.js';
-import { solveEquilibrium, type EquilibriumState } from '../equilibrium/solver.js';
+import { solveEquilibrium } from '../equilibrium/solver.js';
 import { waterAt, type Water } from '../equilibrium/water.js';
-import type { InteractionTable } from '../equilibrium/chemical-system.js';
-import { exp } from '../quantities/reproducible-math.js';
 import { readTemperature } from '../quantities/read-temperature.js';
 import { problem, quote, SoluteError, textOf } from '../quantities/solute-error.js';
 import { readSolutes, type SoluteInput } from '../substances/solutes-text.js';
-import { cautionsFor } from './cautions.js';
-import { classify } from './classification.js';
-import { constantsUsed } from './constants-used.js';
 import { dissolve, type Dissolved } from './dissolve.js';
-import { dissolutionEquations, hydrolysisEquations } from './equations.js';
 import type { Conditions, Prediction } from './prediction.js';
-import { protonAccounts } from './proton-accounts.js';
-import { reasonFor } from './reason.js';
-import { formingSolids, solidStatuses } from './solids.js';
-import { solutionModel, type SolutionModel } from './solution-model.js';
-import { dominantChemicals, speciesTable, spectatorsOf } from './species-table.js';
-import { uncertaintyOf } from './uncertainty.js';
+import { formingSolids } from './solids.js';
+import { solutionModel } from './solution-model.js';
+import { solvedPrediction } from './solved-prediction.js';
+import type { SolvedSolution } from './solved-solution.js';
 
 export type { SoluteInput } from '../substances/solutes-text.js';
 
@@ -30,13 +21,6 @@ export interface PredictionInput extends Partial<Omit<Conditions, 'temperature'>
 
 const DEFAULT_TEMPERATURE = 25;
 
-/** A solved solution with all that was needed to solve it. */
-export interface SolvedSolution {
-  readonly model: SolutionModel;
-  readonly table: InteractionTable;
-  readonly state: EquilibriumState;
-}
-
 /**
  * The pH to expect of an aqueous solution, with what it rests on.
  * @param solutes what is dissolved, as text ("0.10 mol/L NH4Cl; 2.5 g/L Na2HPO4·12H2O"), JSON or an array.
@@ -46,54 +30,21 @@ export function predict(solutes: string | readonly SoluteInput[], input: Predict
   const conditions = readConditions(input);
   const water = waterAt(conditions.temperature);
   const dissolved = dissolve(readSolutes(solutes), water, conditions.volume);
-  const without = solve(dissolved, water, conditions, undefined);
-  const withAir = solve(dissolved, water, conditions, conditions.carbonDioxide);
-  const solved = conditions.air === 'equilibrated' ? withAir : without;
-  const neutralPH = water.pKw / 2;
-  const accounts = protonAccounts(dissolved.particles, solved);
-  const uncertainty = uncertaintyOf(solved, dissolved, accounts);
-  const pH = solved.state.pH;
-  const { classification, decided } = classify(pH, neutralPH, uncertainty.standard);
-  const constants = constantsUsed(solved, water);
-  const reason = reasonFor(classification, accounts, solved, dissolved);
-  return {
-    pH,
-    uncertainty: uncertainty.standard,
-    uncertaintyBudget: uncertainty.budget,
-    neutralPH,
-    classification,
-    decided,
-    ionicStrength: solved.state.ionicStrength,
-    waterActivity: exp(solved.state.lnWaterActivity),
-    bufferCapacity: uncertainty.bufferCapacity,
-    inAir: withAir.state.pH,
-    withoutAir: without.state.pH,
-    conditions,
-    understood: dissolved.understood,
-    dissociation: dissolutionEquations(dissolved),
-    hydrolysis: hydrolysisEquations(dissolved, solved, water, constants, reason),
-    dominant: dominantChemicals(solved),
-    spectators: spectatorsOf(dissolved),
-    species: speciesTable(solved),
-    solids: solidStatuses(solved),
-    reason,
-    cautions: cautionsFor({ solved, dissolved, conditions, uncertainty: uncertainty.standard, bufferCapacity: uncertainty.bufferCapacity, weakSpots: uncertainty.weakSpots }),
-    constants,
-    residual: solved.state.residual,
-  };
+  const open = conditions.air === 'equilibrated';
+  const solved = solve(dissolved, water, conditions, open);
+  return solvedPrediction({ conditions, water, dissolved, solved, other: () => solve(dissolved, water, conditions, !open) });
 }
 
-function solve(dissolved: Dissolved, water: Water, { solids }: Conditions, carbonDioxide: number | undefined): SolvedSolution {
-  const open = solutionModel(dissolved.particles, water, carbonDioxide);
+function solve(dissolved: Dissolved, water: Water, { solids, carbonDioxide }: Conditions, inAir: boolean): SolvedSolution {
+  const open = solutionModel(dissolved.particles, water, inAir ? carbonDioxide : undefined);
   const model = solids === 'equilibrated' ? { ...open, system: { ...open.system, solids: formingSolids(open.solids, dissolved).map(({ definition }) => definition) } } : open;
-  const table = interactionTable(model.system.species, water.debyeHueckelSlope);
-  const state = solveEquilibrium(model.system, table);
+  const state = solveEquilibrium(model.system, model.table);
   if (!state.converged || !Number.isFinite(state.pH)) {
     throw new SoluteError([
       problem('not-converged', `The equilibrium of this mixture did not settle to the required accuracy (residual ${state.residual.toExponential(1)}). Check the amounts for a slip of a power of ten.`, ''),
     ]);
   }
-  return { model, table, state };
+  return { model, table: model.table, state };
 }
 
 const AIR: readonly Conditions['air'][] = ['excluded', 'equilibrated'];

@@ -1,5 +1,5 @@
 import type { ComponentMeaning, DissolvedParticle, SpeciesMeaning } from './solution-model.js';
-import type { SolvedSolution } from './predict.js';
+import type { SolvedSolution } from './solved-solution.js';
 
 /** What one acid–base family or metal did with protons in the solution, compared with how it was put in. */
 export interface ProtonAccount {

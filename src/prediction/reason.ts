@@ -2,8 +2,8 @@ import { formatChemical } from './plain-text.js';
 import type { Chemical, Prediction, Reason } from './prediction.js';
 import type { ProtonAccount, ProtonAccounts } from './proton-accounts.js';
 import type { Dissolved } from './dissolve.js';
-import type { SolvedSolution } from './predict.js';
-import { chemicalOf, HYDROXIDE, PROTON } from './solution-model.js';
+import type { SolvedSolution } from './solved-solution.js';
+import { chemicalOf, HYDROXIDE, PROTON } from './chemicals.js';
 
 /** Share of the free acid or base that must be unspent for it to decide by itself. */
 const UNSPENT = 0.5;

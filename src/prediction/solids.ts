@@ -4,7 +4,7 @@ import type { SolidDefinition } from '../equilibrium/chemical-system.js';
 import type { EquilibriumState } from '../equilibrium/solver.js';
 import type { Dissolved } from './dissolve.js';
 import type { SolidStatus } from './prediction.js';
-import type { SolvedSolution } from './predict.js';
+import type { SolvedSolution } from './solved-solution.js';
 import type { SolidMeaning } from './solution-model.js';
 
 /** Saturation index below which a solid is not worth naming. */

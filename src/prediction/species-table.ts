@@ -1,8 +1,8 @@
 import { exp } from '../quantities/reproducible-math.js';
 import type { Dissolved } from './dissolve.js';
 import type { Chemical, Species, Spectator } from './prediction.js';
-import type { SolvedSolution } from './predict.js';
-import { chemicalOf } from './solution-model.js';
+import type { SolvedSolution } from './solved-solution.js';
+import { chemicalOf } from './chemicals.js';
 import { spectatorRemark } from './spectator-reasons.js';
 
 /** Every species of the solution, in the order of the model. */

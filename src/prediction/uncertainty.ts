@@ -7,7 +7,7 @@ import { formatChemical } from './plain-text.js';
 import type { UncertaintyContribution } from './prediction.js';
 import type { ProtonAccounts } from './proton-accounts.js';
 import { weakSpotsOf, type WeakSpot } from './weak-spots.js';
-import type { SolvedSolution } from './predict.js';
+import type { SolvedSolution } from './solved-solution.js';
 import type { Contribution } from '../substances/ion-library.js';
 import type { ComponentMeaning } from './solution-model.js';
 

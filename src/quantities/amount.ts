@@ -1,4 +1,5 @@
-import { Decimal } from './decimal.js';
+import type { Decimal } from './decimal.js';
+import { exp10 } from './reproducible-math.js';
 import { parseUnit, plainUnit, type Unit } from './units.js';
 
 /** What kind of statement an amount is, and so what it needs to become mol per kilogram of water. */
@@ -9,8 +10,8 @@ export interface Amount {
   readonly kind: AmountKind;
   /** mol/L, g/L, mol/kg, mol or g, by kind. */
   readonly value: Decimal;
-  /** Half of the last digit typed, in the same unit. */
-  readonly halfDigit: Decimal;
+  /** Half of the last digit typed, relative to the value. */
+  readonly relativeHalfDigit: number;
   readonly number: string;
   readonly unit: string;
   /** True when a decimal comma was read. */
@@ -62,9 +63,6 @@ export function readAmount(number: string, unit: string): Amount | AmountFailure
   const comma = plain.includes(',');
   if (/^\+?[1-9]\d{0,2},\d{3}$/.test(plain)) return { failure: 'grouped-number' };
   const [mantissa, exponent] = plain.replace(',', '.').replace(/[ \u00a0\u2009\u202f]/g, '').split(/[eE]|[x×·*]10\^?/) as [string, string?];
-  const value = new Decimal(mantissa.replace(/\.$/, '')).times(new Decimal(10).pow(exponent === undefined ? 0 : Number(exponent)));
-  const decimals = /\.(\d+)$/.exec(mantissa)?.[1]?.length ?? 0;
-  const halfDigit = new Decimal(10).pow((exponent === undefined ? 0 : Number(exponent)) - decimals).div(2);
   const code = plainUnit(unit);
   if (code === '') return { failure: 'unit-missing' };
   if (Object.hasOwn(AMBIGUOUS, code)) {
@@ -75,8 +73,28 @@ export function readAmount(number: string, unit: string): Amount | AmountFailure
   if (!parsed) return { failure: 'unit-unknown' };
   const kind = UNIT_KINDS.find(([, amount, mass, length]) => sameDimension(parsed, amount, mass, length));
   if (!kind) return { failure: 'unit-not-an-amount' };
-  const factor = parsed.factor.times(kind[4]);
-  return { kind: kind[0], value: value.times(factor), halfDigit: halfDigit.times(factor), number, unit, decimalComma: comma };
+  const point = mantissa.indexOf('.');
+  const halfDigit = 0.5 * exp10(point < 0 ? 0 : point + 1 - mantissa.length);
+  return {
+    kind: kind[0],
+    value: factorOf(parsed, kind[4]).times(`${mantissa.replace(/\.$/, '')}e${exponent ?? 0}`),
+    relativeHalfDigit: halfDigit / Number(mantissa),
+    number,
+    unit,
+    decimalComma: comma,
+  };
+}
+
+const FACTORS = new WeakMap<Unit, Decimal>();
+
+/** Factor of a unit to the unit of its kind. */
+function factorOf(unit: Unit, toKind: string): Decimal {
+  let factor = FACTORS.get(unit);
+  if (!factor) {
+    factor = unit.factor.times(toKind);
+    FACTORS.set(unit, factor);
+  }
+  return factor;
 }
 
 function sameDimension(unit: Unit, amount: number, mass: number, length: number): boolean {

@@ -40,6 +40,19 @@ export interface NotIdentified {
  * @param text as typed, without amount; at most a few hundred characters.
  */
 export function identifySubstance(text: string): IdentifiedSubstance | NotIdentified {
+  const known = KNOWN.get(text);
+  if (known) return known;
+  const identified = identify(text);
+  if (KNOWN.size >= MOST_KNOWN) KNOWN.clear();
+  KNOWN.set(text, identified);
+  return identified;
+}
+
+/** Texts already read; a page writes the same few again and again. */
+const KNOWN = new Map<string, IdentifiedSubstance | NotIdentified>();
+const MOST_KNOWN = 512;
+
+function identify(text: string): IdentifiedSubstance | NotIdentified {
   const cas = readCasNumber(text);
   if (cas !== undefined) return identifyCas(cas);
   const formula = parseFormula(text);

@@ -13,7 +13,7 @@ function imbalance(equation: Equation): string {
     for (const { coefficient, chemical } of terms) {
       charge += sign * coefficient * chemical.charge;
       // Aqua ions are shown with their water; other labels may abbreviate, so the formula counts.
-      const formula = chemical.label.startsWith('[') ? chemical.label : (FORMULAS.get(chemical.id) ?? chemical.label);
+      const formula = chemical.label.includes('(H2O)') ? chemical.label : (FORMULAS.get(chemical.id) ?? chemical.label);
       addTo(difference, atomsOf(formula), sign * coefficient);
     }
   }

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { predict, SoluteError, type Prediction } from '../../src/engine.js';
 import { addTo, atomsOf } from '../data/composition.js';
 import { families, ions, metals, substances } from '../data/read.js';
+import { complexes } from '../data/tables.js';
 
 /** The same cases in every run; SEED=… in the environment looks elsewhere. */
 fc.configureGlobal({ seed: Number(process.env['SEED'] ?? 1) });
@@ -11,6 +12,7 @@ export const FORMULAS: ReadonlyMap<string, string> = new Map([
   ...ions.map(({ id, formula }) => [id, formula] as const),
   ...families.flatMap(({ states }) => states.map(({ id, formula }) => [id, formula] as const)),
   ...metals.flatMap(({ ion, formula, hydrolysis }) => [[ion, formula] as const, ...hydrolysis.map((species) => [species.id, species.formula] as const)]),
+  ...complexes.map(({ id, formula }) => [id, formula] as const),
   ['H3O+', 'H3O'] as const,
   ['OH-', 'OH'] as const,
   ['H2O', 'H2O'] as const,
@@ -58,6 +60,10 @@ export function imbalances(prediction: Prediction): Map<string, number> {
     const atoms = atomsOf(FORMULAS.get(chemical.id)!);
     addTo(sums, atoms, molality);
     addTo(sizes, atoms, molality);
+  }
+  for (const { formula, amount = 0 } of prediction.solids) {
+    addTo(sums, atomsOf(formula), amount);
+    addTo(sizes, atomsOf(formula), amount);
   }
   for (const { formula, molality } of prediction.understood) {
     addTo(sums, atomsOf(formula), -molality);

@@ -5,7 +5,7 @@ import { identifySubstance, type IdentifiedSubstance } from '../../src/substance
 import { particleOf, type Particle } from '../../src/substances/ion-library.js';
 import { formulaOfParts } from '../../src/substances/salt-names.js';
 import { partsOf } from '../../src/substances/substance-library.js';
-import { ions, substances } from '../data/read.js';
+import { ions, substances, type Ion } from '../data/read.js';
 
 function identified(text: string): IdentifiedSubstance {
   const result = identifySubstance(text);
@@ -28,6 +28,8 @@ describe('every listed substance', () => {
     for (const [names, formula] of substances) {
       for (const name of names) {
         for (const typed of [name, name.toUpperCase(), name.replaceAll(' ', '  '), name.replaceAll('-', '‑')]) {
+          // What reads as a formula exactly as typed is one ("HYPO").
+          if (typed !== name && !('failure' in parseFormula(typed))) continue;
           const result = identifySubstance(typed);
           if ('code' in result || result.formula !== formula) wrong.push(`${typed}: ${'code' in result ? result.code : result.formula} instead of ${formula}`);
         }
@@ -83,8 +85,11 @@ describe('salts of known ions', () => {
     return [{ particle: cation, count: -anion.charge / common }, { particle: anion, count: cation.charge / common }];
   }
 
+  /** Anions whose formula is read only beside certain cations, since it reads as oxide or sulfide elsewhere. */
+  const onlyWith = new Map((ions as (Ion & { onlyWith?: string[] })[]).map((ion) => [ion.id, ion.onlyWith]));
+
   it('are found by the formula written from their ions, or raise a question', (t) => {
-    const counts = { same: 0, otherReading: 0, question: 0 };
+    const counts = { same: 0, otherReading: 0, question: 0, refused: 0 };
     const wrong: string[] = [];
     const others: string[] = [];
     for (const cation of cations) {
@@ -92,8 +97,10 @@ describe('salts of known ions', () => {
         const parts = salt(cation, anion);
         const formula = formulaOfParts(parts);
         const result = identifySubstance(formula);
+        const restricted = onlyWith.get(anion.id);
         if ('code' in result) {
-          if (result.code === 'substance-ambiguous') counts.question++;
+          if (restricted !== undefined && !restricted.includes(cation.id)) counts.refused++;
+          else if (result.code === 'substance-ambiguous') counts.question++;
           else wrong.push(`${formula} (${partsText(parts)}): ${result.code}`);
         } else if (partsText(result.parts) === partsText(parts)) counts.same++;
         else {
@@ -105,7 +112,7 @@ describe('salts of known ions', () => {
         }
       }
     }
-    t.diagnostic(`${cations.length} cations × ${anions.length} anions: ${counts.same} the same pair, ${counts.question} a question, ${counts.otherReading} another reading of the same atoms`);
+    t.diagnostic(`${cations.length} cations × ${anions.length} anions: ${counts.same} the same pair, ${counts.question} a question, ${counts.refused} refused as peroxides and polysulfides known with few cations, ${counts.otherReading} another reading of the same atoms`);
     for (const other of others.slice(0, 60)) t.diagnostic(other);
     assert.deepEqual(wrong, []);
   });
