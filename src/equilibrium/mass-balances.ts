@@ -9,8 +9,18 @@ import { boundMixedSpecies, meanProtonation, startingPoint, type BalanceArrays }
 const LARGEST_STEP = 6;
 const MOST_STEPS = 200;
 const GRADIENT_TOLERANCE = 1e-13;
-const STEP_TOLERANCE = 1e-14;
+const STEP_TOLERANCE = 1e-16;
 const NO_COLUMNS = new Int32Array(0);
+
+/** Share of a balance's terms above which one species is said to hold it. */
+const MOST_OF_A_BALANCE = 0.7;
+
+/** A multiple of one balance taken off another. */
+interface BasisChange {
+  readonly column: number;
+  readonly other: number;
+  readonly times: number;
+}
 
 /**
  * All balances at fixed activity coefficients, as one convex problem.
@@ -48,6 +58,7 @@ export class MassBalances {
   #lnWater = 0;
   readonly #lnTotals: Float64Array;
   readonly #arrays: BalanceArrays;
+  readonly #changes: BasisChange[] = [];
   /** Molality of the species that take part in no reaction, 0 for all others. */
   readonly #fixed: Float64Array;
   readonly #gradient: Float64Array;
@@ -55,6 +66,7 @@ export class MassBalances {
   readonly #hessian: Float64Array;
   readonly #step: Float64Array;
   readonly #trial: Float64Array;
+  readonly #offset: Float64Array;
   readonly #scale: Float64Array;
 
   constructor(system: ChemicalSystem) {
@@ -90,6 +102,7 @@ export class MassBalances {
     this.#hessian = new Float64Array(size * size);
     this.#step = new Float64Array(size);
     this.#trial = new Float64Array(size);
+    this.#offset = new Float64Array(size);
     this.#scale = new Float64Array(size);
     this.#arrays = {
       size,
@@ -110,9 +123,14 @@ export class MassBalances {
 
   /** ln a of every component of the system, those held from outside included. */
   componentActivities(): Float64Array {
+    const unknowns = this.#unknowns.slice();
+    for (let place = this.#changes.length - 1; place >= 0; place--) {
+      const { column, other, times } = this.#changes[place]!;
+      unknowns[column] = unknowns[column]! - times * unknowns[other]!;
+    }
     const activities = new Float64Array(this.#system.components.length);
     this.#system.components.forEach((component, index) => (activities[index] = component.lnActivity ?? 0));
-    this.#free.forEach((component, i) => (activities[component] = this.#unknowns[i]! - this.#shift[i]! * this.lnProtonActivity));
+    this.#free.forEach((component, i) => (activities[component] = unknowns[i]! - this.#shift[i]! * this.lnProtonActivity));
     return activities;
   }
 
@@ -145,12 +163,21 @@ export class MassBalances {
     if (this.#saturation) this.#saturation.constraint.complete(this.#unknowns, this.#saturation.offsets);
   }
 
+  /**
+   * The unknowns are counted from the present point, which is folded into the exponents: a strongly bound complex has
+   * unknowns of a size whose last bit is larger than the free ligand that the balances leave.
+   */
   #descend(tolerance: number): void {
     const size = this.#size;
     const enough = Math.max(tolerance, GRADIENT_TOLERANCE);
-    this.#evaluate(this.#unknowns);
+    for (let j = 0; j < this.molality.length; j++) {
+      const end = this.#rows[j + 1]!;
+      for (let entry = this.#rows[j]!; entry < end; entry++) this.#exponents[j] = this.#exponents[j]! + this.#entries[entry]! * this.#unknowns[this.#columns[entry]!]!;
+    }
+    const offset = this.#offset.fill(0);
+    this.#evaluate(offset);
     for (let iteration = 0; iteration < MOST_STEPS; iteration++) {
-      if (this.#largestGradient() < enough) return;
+      if (this.#largestGradient() < enough) break;
       this.#setHessian();
       for (let i = 0; i < size; i++) this.#step[i] = -this.#gradient[i]!;
       solveScaled(this.#hessian, this.#step, size, this.#scale);
@@ -162,16 +189,63 @@ export class MassBalances {
       }
       let length = longest > LARGEST_STEP ? LARGEST_STEP / longest : 1;
       for (let halving = 0; halving < 60; halving++) {
-        for (let i = 0; i < size; i++) this.#trial[i] = this.#unknowns[i]! + length * this.#step[i]!;
+        for (let i = 0; i < size; i++) this.#trial[i] = offset[i]! + length * this.#step[i]!;
         this.#evaluate(this.#trial);
         let slopeThere = 0;
         for (let i = 0; i < size; i++) slopeThere += this.#step[i]! * this.#gradient[i]!;
         if (slopeThere <= 0.5 * Math.abs(slope) || longest * length < STEP_TOLERANCE) break;
         length /= 2;
       }
-      this.#unknowns.set(this.#trial);
-      if (longest < STEP_TOLERANCE) return;
+      offset.set(this.#trial);
+      if (longest < STEP_TOLERANCE) break;
     }
+    for (let i = 0; i < size; i++) this.#unknowns[i] = this.#unknowns[i]! + offset[i]!;
+  }
+
+  /**
+   * Rewrites the balances so that the species that holds most of a component stands in that balance alone: every other
+   * balance in which it occurs has the right multiple of this one taken off. A balance then no longer is the small
+   * difference of large terms, as free ligand beside a strongly bound complex otherwise is.
+   */
+  rebase(): void {
+    const size = this.#size;
+    const last = size - 1;
+    for (let i = 0; i < last; i++) this.#unknowns[i] = this.#unknowns[i]! - this.#shift[i]! * this.#unknowns[last]!;
+    this.#setShift(null);
+    for (let column = 0; column < last; column++) {
+      const species = this.#holderOf(column);
+      if (species < 0) continue;
+      const own = this.#numbers[species * size + column]!;
+      for (let other = 0; other < size; other++) {
+        const times = this.#numbers[species * size + other]! / own;
+        if (other !== column && times !== 0 && Number.isInteger(2 * times)) this.#takeOff({ column, other, times });
+      }
+    }
+    this.#compress();
+  }
+
+  /** The species that holds nearly all of a balance's terms; −1 for none. */
+  #holderOf(column: number): number {
+    let most = 0;
+    let holder = -1;
+    let sum = 0;
+    for (let j = 0; j < this.molality.length; j++) {
+      const term = Math.abs(this.#numbers[j * this.#size + column]!) * this.molality[j]!;
+      sum += term;
+      if (term <= most) continue;
+      most = term;
+      holder = j;
+    }
+    return most > MOST_OF_A_BALANCE * sum ? holder : -1;
+  }
+
+  #takeOff(operation: BasisChange): void {
+    const { column, other, times } = operation;
+    const size = this.#size;
+    this.#changes.push(operation);
+    for (let j = 0; j < this.molality.length; j++) this.#numbers[j * size + other] = this.#numbers[j * size + other]! - times * this.#numbers[j * size + column]!;
+    this.#totals[other] = this.#totals[other]! - times * this.#totals[column]!;
+    this.#unknowns[column] = this.#unknowns[column]! + times * this.#unknowns[other]!;
   }
 
   /**
@@ -231,6 +305,7 @@ export class MassBalances {
       protons -= number * this.#shift[i]!;
     }
     numbers[this.#size - 1] = protons;
+    for (const { column, other, times } of this.#changes) numbers[other] = numbers[other]! - times * numbers[column]!;
     return numbers;
   }
 

@@ -14,12 +14,15 @@ export interface Sensitivities {
   readonly toProtonTotal: number;
   /** ∂pH/∂(ln γ) of every species from outside the model, as the model error of the coefficients acts. */
   readonly toLnGamma: Float64Array;
+  /** ∂pH/∂(ln K) of every solid of the system; 0 for those not present. */
+  readonly toLnSolubility: Float64Array;
 }
 
 /**
  * Implicit differentiation of the solved balances. With M = diag(m), N the stoichiometric numbers and G = ∂ln γ/∂m,
  * dm = (M⁻¹ + G)⁻¹ (N dξ + d ln β − d ln γ) and Nᵀ dm = dt, so that one symmetric system gives all derivatives of pH
- * (adjoint form). The activity of water is held.
+ * (adjoint form). A solid that is present adds its condition n·dξ = d ln K and an unknown amount. The activity of water
+ * is held.
  * @returns undefined when the system is singular to working precision.
  */
 export function sensitivities(system: ChemicalSystem, table: InteractionTable, state: EquilibriumState): Sensitivities | undefined {
@@ -49,20 +52,32 @@ export function sensitivities(system: ChemicalSystem, table: InteractionTable, s
   const response = scaled.slice();
   if (!solveGeneral(matrix, response, count, size)) return undefined;
 
-  // Nᵀ W N with W = √M (1 + √M G √M)⁻¹ √M.
-  const reduced = new Float64Array(size * size);
+  // Nᵀ W N with W = √M (1 + √M G √M)⁻¹ √M, bordered by the conditions of the solids present.
+  const solids = (system.solids ?? []).map((solid, index) => ({ solid, index })).filter(({ index }) => state.solidAmounts[index]! > 0);
+  const order = size + solids.length;
+  const bordered = new Float64Array(order * order);
   for (let a = 0; a < size; a++) {
     for (let b = 0; b < size; b++) {
       let sum = 0;
       for (let j = 0; j < count; j++) sum += scaled[j * size + a]! * response[j * size + b]!;
-      reduced[a * size + b] = sum;
+      bordered[a * order + b] = sum;
     }
   }
-  const proton = new Float64Array(size);
+  const column = new Map(free.map(({ index }, i) => [index, i]));
+  solids.forEach(({ solid }, place) => {
+    const row = size + place;
+    const set = (i: number, number: number): void => {
+      bordered[row * order + i] = number;
+      bordered[i * order + row] = number;
+    };
+    set(size - 1, solid.protons);
+    for (const [component, number] of solid.stoichiometry) if (column.has(component)) set(column.get(component)!, number);
+  });
+  const proton = new Float64Array(order);
   proton[size - 1] = 1;
-  if (!solveGeneral(reduced, proton, size)) return undefined;
+  if (!solveGeneral(bordered, proton, order)) return undefined;
 
-  // pH = −y/ln 10; dy = vᵀ dt − (W N v)ᵀ (d ln β − d ln γ).
+  // pH = −y/ln 10; dy = vᵀ (dt, d ln K) − (W N v)ᵀ (d ln β − d ln γ).
   const toTotal = new Float64Array(system.components.length);
   free.forEach(({ index }, i) => (toTotal[index] = -proton[i]! / LN10));
   const toLnBeta = new Float64Array(count);
@@ -73,7 +88,9 @@ export function sensitivities(system: ChemicalSystem, table: InteractionTable, s
     toLnBeta[j] = (root[j]! * sum) / LN10;
     toLnGamma[j] = -toLnBeta[j]!;
   }
-  return { toLnBeta, toTotal, toProtonTotal: -proton[size - 1]! / LN10, toLnGamma };
+  const toLnSolubility = new Float64Array(system.solids?.length ?? 0);
+  solids.forEach(({ index }, place) => (toLnSolubility[index] = -proton[size + place]! / LN10));
+  return { toLnBeta, toLnSolubility, toTotal, toProtonTotal: -proton[size - 1]! / LN10, toLnGamma };
 }
 
 function stoichiometricNumbers(system: ChemicalSystem, free: readonly number[]): Float64Array {

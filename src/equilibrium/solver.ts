@@ -31,6 +31,8 @@ const COEFFICIENT_TOLERANCE = 1e-10;
 /** The balances are solved this much more closely than the coefficients are known. */
 const BALANCE_TOLERANCE = 1e-7;
 const MOST_ITERATIONS = 300;
+/** Residual that rounding alone leaves in well-conditioned balances, with room. */
+const REBASE_RESIDUAL = 1e-12;
 /** Certificate demanded of a converged state. */
 const RESIDUAL_TOLERANCE = 1e-10;
 
@@ -56,6 +58,11 @@ export function solveEquilibrium(system: ChemicalSystem, table: InteractionTable
   if (!start) activityCoefficients(table, balances.molality, coefficients);
   let round = settle(balances, table, coefficients);
   let iterations = round.iterations;
+  if (balances.residual() > REBASE_RESIDUAL) {
+    balances.rebase();
+    round = settle(balances, table, coefficients);
+    iterations += round.iterations;
+  }
   const present = new PresentSolids(balances, system.solids ?? []);
   while (round.settled && present.exchange()) {
     round = settle(balances, table, coefficients);

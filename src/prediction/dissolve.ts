@@ -81,17 +81,25 @@ function refuse(solutes: readonly ReadSolute[], perLitre: readonly (Decimal | un
   if (problems.length > 0) throw new SoluteError(problems);
 }
 
-/** The litre that all solutes make; those given per kilogram of water enter with the molarity they would have in water. */
+/** Passes in which the molarity of an amount per kilogram of water and the water in a litre come to agree. */
+const PASSES = 12;
+
+/** The litre that all solutes make. */
 function litreOf(solutes: readonly ReadSolute[], perLitre: readonly (Decimal | undefined)[], water: Water): LitreOfSolution {
-  return litreOfSolution(
-    solutes.map(({ amount, substance }, index) => ({
-      molarity: amount.kind === 'molality' ? (amount.value.toNumber() * water.density) / 1000 : perLitre[index]!.toNumber(),
-      anhydrousMass: substance.anhydrousMass,
-      particles: substance.parts.map(({ particle, count }) => ({ id: particle.id, count })),
-    })),
-    water.temperature,
-    water.density,
-  );
+  const anyMolality = solutes.some(({ amount }) => amount.kind === 'molality');
+  let litre: LitreOfSolution = { water: water.density / 1000, bases: [] };
+  for (let pass = 0; pass < (anyMolality ? PASSES : 1); pass++) {
+    litre = litreOfSolution(
+      solutes.map(({ amount, substance }, index) => ({
+        molarity: amount.kind === 'molality' ? amount.value.toNumber() * litre.water : perLitre[index]!.toNumber(),
+        anhydrousMass: substance.anhydrousMass,
+        particles: substance.parts.map(({ particle, count }) => ({ id: particle.id, count })),
+      })),
+      water.temperature,
+      water.density,
+    );
+  }
+  return litre;
 }
 
 function outOfRange(read: ReadSolute, index: number, molality: number): Problem {

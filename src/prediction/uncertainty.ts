@@ -41,6 +41,7 @@ export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved, acco
   const lines: Line[] = [
     ...solved.model.components.flatMap((meaning) => constantLines(meaning, slopes)),
     ...complexLines(solved, slopes),
+    ...solidLines(solved, slopes),
     ...dissolved.solutes.map((solute) => amountLine(solute, solved, slopes)),
     ...modelLines(solved, dissolved, slopes),
     ...weakSpots.map(({ reason, contribution }): Line => ({ of: `incomplete data: ${reason}`, kind: 'model', contribution, basis: 'model' })),
@@ -86,6 +87,15 @@ function complexLines({ model }: SolvedSolution, slopes: Sensitivities): Line[] 
     contribution: Math.abs(slopes.toLnBeta[species]!) * LN10 * constant.uncertainty,
     basis: constant.stated ? 'stated' : 'graded',
   }));
+}
+
+function solidLines({ model }: SolvedSolution, slopes: Sensitivities): Line[] {
+  const constants = new Map(model.solids.map((meaning) => [meaning.solid.id, meaning]));
+  return (model.system.solids ?? []).flatMap((definition, index): Line[] => {
+    const { solid, constant } = constants.get(definition.id)!;
+    const contribution = Math.abs(slopes.toLnSolubility[index]!) * LN10 * constant.uncertainty;
+    return contribution === 0 ? [] : [{ of: `solubility constant of ${solid.name}`, kind: 'constant', contribution, basis: constant.stated ? 'stated' : 'graded' }];
+  });
 }
 
 function amountLine(solute: DissolvedSolute, solved: SolvedSolution, slopes: Sensitivities): Line {

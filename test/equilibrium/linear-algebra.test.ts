@@ -2,6 +2,7 @@ import assert from 'node:assert/strict';
 import { describe, it } from 'node:test';
 import fc from 'fast-check';
 import { factorScaled, solveFactored, solveGeneral, solveScaled } from '../../src/equilibrium/linear-algebra.js';
+import './support.js';
 
 const size = fc.integer({ min: 1, max: 7 });
 const entries = (count: number) => fc.array(fc.double({ min: -1, max: 1, noNaN: true, noDefaultInfinity: true }), { minLength: count, maxLength: count });

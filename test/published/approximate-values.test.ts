@@ -15,7 +15,7 @@ const STAYS_WITHIN = 0.02;
 /** Values that are missed, with the pH predicted, to which they are held so that a change is noticed. */
 const MISSING: Readonly<Record<string, { readonly predicted: number; readonly reason: string }>> = {
   '0.0167 mol/L KAl(SO4)2': {
-    predicted: 3.73,
+    predicted: 4.09,
     reason: 'the table does not say what an equivalent of alum is, and no critical constant exists for mixed hydroxo-sulfato species of aluminium',
   },
 };
