@@ -13,12 +13,10 @@ export interface SectionsView {
   isOpen(section: Section): boolean;
   /** A section that was opened once keeps its content, so that opening it again costs nothing. */
   hasContent(section: Section): boolean;
-  /** Comes before the section opens, so that it opens with its content. */
-  onPrepare(section: Section): void;
-  onToggle(section: Section, open: boolean): void;
+  onToggle(section: Section): void;
 }
 
-/** Equations, composition and constants, each behind a heading that opens it in place, downwards. */
+/** Equations, composition and constants, each behind a button that opens it in place, downwards. */
 export function renderSections(view: SectionsView): TemplateResult {
   const { prediction, numbers } = view;
   const { dissociation, hydrolysis, species, constants } = prediction;
@@ -32,17 +30,20 @@ export function renderSections(view: SectionsView): TemplateResult {
   `;
 }
 
+/** A button and what it opens: a page of many `<details>` makes browsers collect the styles of all cards at every frame. */
 function section(
   view: SectionsView,
   name: Section,
   count: string,
   content: (prediction: Prediction, numbers: Numbers) => TemplateResult,
 ): TemplateResult {
-  const onToggle = ({ currentTarget }: Event) => view.onToggle(name, (currentTarget as HTMLDetailsElement).open);
+  const open = view.isOpen(name);
   return html`
-    <details part=${`section section-${name}`} ?open=${view.isOpen(name)} @toggle=${onToggle}>
-      <summary part="summary" @click=${() => view.onPrepare(name)}><span class="chevron" aria-hidden="true"></span>${strings.sections[name]}<span class="count">${count}</span></summary>
-      <div class="section-content">${view.hasContent(name) ? content(view.prediction, view.numbers) : nothing}</div>
-    </details>
+    <div class=${open ? 'section open' : 'section'} part=${open ? `section section-${name} section-open` : `section section-${name}`}>
+      <button type="button" class="summary" part="summary" id=${`${name}-summary`} aria-expanded=${open ? 'true' : 'false'} aria-controls=${name} @click=${() => view.onToggle(name)}>
+        <span class="chevron" aria-hidden="true"></span><span>${strings.sections[name]}</span><span class="count">${count}</span>
+      </button>
+      <div class="section-content" id=${name} role="group" aria-labelledby=${`${name}-summary`} ?hidden=${!open}>${view.hasContent(name) ? content(view.prediction, view.numbers) : nothing}</div>
+    </div>
   `;
 }

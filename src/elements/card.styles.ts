@@ -59,6 +59,8 @@ const frameStyles = css`
     text-transform: none;
     white-space: normal;
     overflow-wrap: anywhere;
+    /* Holds what is only heard, so that it does not enlarge a part of the page that scrolls. */
+    position: relative;
     display: grid;
     grid-template-columns: minmax(0, 1fr);
     row-gap: calc(1.5 * var(--_space));
@@ -80,8 +82,7 @@ const frameStyles = css`
     outline: 2px solid var(--_focus);
     outline-offset: -3px;
   }
-  button:focus-visible,
-  summary:focus-visible {
+  button:focus-visible {
     outline: 2px solid var(--_focus);
     outline-offset: 2px;
   }

@@ -348,16 +348,9 @@ export class SoluteCard extends SoluteFormElement implements Printable {
       numbers,
       isOpen: (section) => this.#printing || this.#open.has(section),
       hasContent: (section) => this.#filled.has(section),
-      onPrepare: (section) => {
-        if (this.#filled.has(section)) return;
-        this.#filled.add(section);
-        this.requestUpdate();
-        this.performUpdate();
-      },
-      onToggle: (section, open) => {
-        if (this.#printing || open === this.#open.has(section)) return;
-        if (open) this.#open.add(section);
-        else this.#open.delete(section);
+      onToggle: (section) => {
+        if (this.#printing) return;
+        if (!this.#open.delete(section)) this.#open.add(section);
         this.requestUpdate();
       },
     };

@@ -40,13 +40,8 @@ export const mediaStyles = css`
       break-inside: avoid;
       print-color-adjust: exact;
     }
-    details::details-content {
-      display: block;
-      block-size: auto;
-      content-visibility: visible;
-    }
     .chevron,
-    button {
+    .store button {
       display: none;
     }
     .store:not(:has(.stored)) {

@@ -6,23 +6,19 @@ export const sectionStyles = css`
     margin-block-end: calc(-1 * var(--_space));
     border-block-start: 1px solid var(--_line);
   }
-  details + details {
+  .section + .section {
     border-block-start: 1px solid var(--_line);
   }
-  summary {
+  .summary {
     display: flex;
     align-items: baseline;
     gap: calc(1.25 * var(--_space));
+    inline-size: 100%;
     min-block-size: 2.25rem;
-    padding-block: calc(0.9 * var(--_space));
-    cursor: pointer;
-    list-style: none;
-  }
-  summary::-webkit-details-marker {
-    display: none;
-  }
-  summary:hover {
-    background: var(--_sunken);
+    padding: calc(0.9 * var(--_space)) 0;
+    border: 0;
+    border-radius: 0;
+    text-align: start;
   }
   .chevron {
     flex: none;
@@ -35,7 +31,7 @@ export const sectionStyles = css`
   .chevron:dir(rtl) {
     transform: translateY(-0.1em) rotate(135deg);
   }
-  details[open] > summary > .chevron {
+  [aria-expanded='true'] > .chevron {
     transform: translateY(-0.2em) rotate(45deg);
   }
   .count {
@@ -48,6 +44,9 @@ export const sectionStyles = css`
     grid-template-columns: minmax(0, 1fr);
     row-gap: var(--_space);
     padding-block: calc(0.5 * var(--_space)) calc(2 * var(--_space));
+  }
+  .section-content[hidden] {
+    display: none;
   }
   .group-title {
     color: var(--_muted);

@@ -5,13 +5,14 @@ const DEPTH = 4;
 const LARGEST_STEP = 5;
 /** Growing residuals after which no more combinations are tried. */
 const MOST_SETBACKS = 10;
-const SHORTEST_STEP = 1e-3;
+const WEIGHTS = [0.5, 0.2, 0.05, 0.0125, 0.003] as const;
+const STEPS_OF_A_WEIGHT = 90;
 
 /**
  * Accelerates a fixed-point iteration x ← g(x) by combining the last few steps (D. G. Anderson, J. ACM 12 (1965) 547;
  * the least-squares form of Walker & Ni, SIAM J. Numer. Anal. 49 (2011) 1715, eq. 2.2).
- * When residuals keep growing it goes over to plain steps of a length that is halved after every setback: an oscillating
- * map, however steep, is damped by a short enough step.
+ * When residuals keep growing it goes over to plain steps, of a length that is cut from time to time: a map that leads
+ * away from here is followed with the longer ones, and an oscillating one, however steep, is damped by the shorter.
  */
 export class AndersonAcceleration {
   readonly #size: number;
@@ -19,7 +20,7 @@ export class AndersonAcceleration {
   readonly #residuals: Float64Array[] = [];
   #lastNorm = Infinity;
   #setbacks = 0;
-  #weight = 1;
+  #plainSteps = 0;
 
   constructor(size: number) {
     this.#size = size;
@@ -33,8 +34,7 @@ export class AndersonAcceleration {
       residual[j] = image[j]! - x[j]!;
       norm = Math.max(norm, Math.abs(residual[j]!));
     }
-    const setback = norm > this.#lastNorm;
-    if (setback) this.#setbacks++;
+    if (norm > this.#lastNorm) this.#setbacks++;
     this.#lastNorm = norm;
     this.#points.push(x.slice());
     this.#residuals.push(residual);
@@ -43,8 +43,8 @@ export class AndersonAcceleration {
       this.#residuals.shift();
     }
     if (this.#setbacks < MOST_SETBACKS && this.#points.length > 1 && this.#combine(x)) return;
-    if (this.#setbacks >= MOST_SETBACKS) this.#weight = setback ? Math.max(SHORTEST_STEP, this.#weight / 2) : Math.min(1, this.#weight * 1.1);
-    for (let j = 0; j < this.#size; j++) x[j] = x[j]! + this.#weight * residual[j]!;
+    const weight = this.#setbacks < MOST_SETBACKS ? 1 : WEIGHTS[Math.min(WEIGHTS.length - 1, Math.floor(this.#plainSteps++ / STEPS_OF_A_WEIGHT))]!;
+    for (let j = 0; j < this.#size; j++) x[j] = x[j]! + weight * residual[j]!;
   }
 
   #combine(x: Float64Array): boolean {

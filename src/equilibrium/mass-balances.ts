@@ -277,9 +277,18 @@ export class MassBalances {
   /** mol/kg water of every solid given to {@link saturate}, in its order. */
   solidAmounts(): Float64Array {
     if (!this.#saturation) return new Float64Array(0);
+    const size = this.#size;
     const lacking = this.#totals.slice();
-    for (let j = 0; j < this.molality.length; j++) for (let i = 0; i < this.#size; i++) lacking[i] = lacking[i]! - this.#numbers[j * this.#size + i]! * this.molality[j]!;
-    return this.#saturation.constraint.amounts(lacking);
+    const magnitude = this.#totals.map(Math.abs);
+    for (let j = 0; j < this.molality.length; j++) {
+      if (this.#fixed[j]! > 0) continue;
+      for (let i = 0; i < size; i++) {
+        const term = this.#numbers[j * size + i]! * this.molality[j]!;
+        lacking[i] = lacking[i]! - term;
+        magnitude[i] = magnitude[i]! + Math.abs(term);
+      }
+    }
+    return this.#saturation.constraint.amounts(lacking, magnitude);
   }
 
   #applySaturation(): void {

@@ -15,6 +15,9 @@ export class PresentSolids {
   readonly #solids: readonly SolidDefinition[];
   #present: number[] = [];
   #exchanges = 0;
+  /** Grows when a set comes back: two solids on the verge of the same composition, which rounding would exchange for ever. */
+  #leniency = 1;
+  readonly #visited = new Set<string>();
 
   constructor(balances: MassBalances, solids: readonly SolidDefinition[]) {
     this.#balances = balances;
@@ -30,8 +33,11 @@ export class PresentSolids {
   exchange(): boolean {
     if (this.#solids.length === 0 || !this.decided) return false;
     this.#exchanges++;
+    const key = [...this.#present].sort().join(' ');
+    if (this.#visited.has(key)) this.#leniency *= 10;
+    this.#visited.add(key);
     const amounts = this.#balances.solidAmounts();
-    let least = -SMALLEST_AMOUNT;
+    let least = -SMALLEST_AMOUNT * this.#leniency;
     let leaving = -1;
     amounts.forEach((amount, place) => {
       if (amount < least) {
@@ -45,7 +51,7 @@ export class PresentSolids {
       return true;
     }
     let entering = -1;
-    let most = SATURATED;
+    let most = SATURATED * this.#leniency;
     this.#solids.forEach((solid, index) => {
       if (this.#present.includes(index)) return;
       const saturation = this.#balances.lnSaturation(solid) / this.#sizeOf(solid);

@@ -2,6 +2,7 @@ import { solveGeneral } from './linear-algebra.js';
 
 /** A relative pivot below this means that the solids' compositions depend on each other. */
 const SMALLEST_PIVOT = 1e-9;
+const REFINEMENTS = 3;
 
 /**
  * The condition that some solids are in equilibrium with the solution: for each, n·ξ = ln K. Gaussian elimination
@@ -96,16 +97,34 @@ export class SaturationConstraint {
     }
   }
 
-  /** Amounts of the solids, mol/kg water, that make up what the solution lacks of every balance. */
-  amounts(lacking: Float64Array): Float64Array {
+  /**
+   * Amounts of the solids, mol/kg water, that make up what the solution lacks of every balance: least squares relative
+   * to the size of each balance, since the small ones know a small amount best.
+   */
+  amounts(lacking: Float64Array, magnitude: Float64Array): Float64Array {
     const count = this.dependent.length;
-    const matrix = new Float64Array(count * count);
     const amounts = new Float64Array(count);
-    for (let row = 0; row < count; row++) {
-      for (let s = 0; s < count; s++) matrix[row * count + s] = this.#numbers[s]![this.dependent[row]!]!;
-      amounts[row] = lacking[this.dependent[row]!]!;
+    const left = lacking.slice();
+    // The balances differ in size by up to ten powers of ten; what one solution of the normal equations leaves, the next takes up.
+    for (let round = 0; round < REFINEMENTS; round++) {
+      const matrix = new Float64Array(count * count);
+      const correction = new Float64Array(count);
+      for (let i = 0; i < this.#size; i++) {
+        if (magnitude[i] === 0) continue;
+        const weight = 1 / (magnitude[i]! * magnitude[i]!);
+        for (let a = 0; a < count; a++) {
+          const weighted = weight * this.#numbers[a]![i]!;
+          if (weighted === 0) continue;
+          correction[a] = correction[a]! + weighted * left[i]!;
+          for (let b = 0; b < count; b++) matrix[a * count + b] = matrix[a * count + b]! + weighted * this.#numbers[b]![i]!;
+        }
+      }
+      if (!solveGeneral(matrix, correction, count)) return amounts;
+      for (let s = 0; s < count; s++) {
+        amounts[s] = amounts[s]! + correction[s]!;
+        for (let i = 0; i < this.#size; i++) left[i] = left[i]! - this.#numbers[s]![i]! * correction[s]!;
+      }
     }
-    solveGeneral(matrix, amounts, count);
     return amounts;
   }
 }

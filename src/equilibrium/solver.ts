@@ -30,7 +30,7 @@ export interface EquilibriumState {
 const COEFFICIENT_TOLERANCE = 1e-10;
 /** The balances are solved this much more closely than the coefficients are known. */
 const BALANCE_TOLERANCE = 1e-7;
-const MOST_ITERATIONS = 300;
+const MOST_ITERATIONS = 600;
 /** Residual that rounding alone leaves in well-conditioned balances, with room. */
 const REBASE_RESIDUAL = 1e-12;
 /** Certificate demanded of a converged state. */
