@@ -7,11 +7,11 @@ import { english as strings } from './strings/english.js';
 export type Section = 'equations' | 'composition' | 'constants';
 export const SECTIONS: readonly Section[] = ['equations', 'composition', 'constants'];
 
-export type Air = Conditions['air'];
-const AIRS: readonly Air[] = ['excluded', 'equilibrated'];
-
-export const DEFAULT_TEMPERATURE = 25;
-export const DEFAULT_AIR: Air = 'excluded';
+/** Conditions that attributes state. */
+export type StatedConditions = Pick<Conditions, 'temperature' | 'air' | 'solids'>;
+const AIRS: readonly StatedConditions['air'][] = ['excluded', 'equilibrated'];
+const SOLIDS: readonly StatedConditions['solids'][] = ['watched', 'equilibrated'];
+const DEFAULTS: StatedConditions = { temperature: 25, air: 'excluded', solids: 'watched' };
 
 /** Solutes as a page may give them. */
 export type SolutesGiven = string | readonly SoluteInput[];
@@ -51,7 +51,7 @@ function serialized(value: unknown): string {
 }
 
 /** Celsius. What cannot be read falls back; what can be read but lies outside liquid water is a problem. */
-export function readTemperatureSetting(given: unknown, fallback: number): Reading<number> {
+function readTemperatureSetting(given: unknown, fallback: number): Reading<number> {
   if (given === null || given === undefined || given === '') return { value: fallback };
   try {
     return { value: readTemperature(typeof given === 'number' ? given : shown(given)) };
@@ -62,11 +62,24 @@ export function readTemperatureSetting(given: unknown, fallback: number): Readin
   }
 }
 
-export function readAirSetting(given: unknown, fallback: Air): Reading<Air> {
+function readOneOf<Value extends string>(attribute: string, given: unknown, values: readonly Value[], fallback: Value): Reading<Value> {
   if (given === null || given === undefined || given === '') return { value: fallback };
-  const known = AIRS.find((air) => air === given);
+  const known = values.find((value) => value === given);
   if (known) return { value: known };
-  return { value: fallback, note: strings.notes.unknownValue('air', shown(given), AIRS.join(', '), fallback) };
+  return { value: fallback, note: strings.notes.unknownValue(attribute, shown(given), values.join(', '), fallback) };
+}
+
+/** The conditions of an element: its own settings over those around it over the defaults. */
+export function readConditions(given: Readonly<Record<keyof StatedConditions, unknown>>, around: Partial<StatedConditions> = {}): Omit<Reading<StatedConditions>, 'note'> & { readonly notes: readonly string[] } {
+  const fallback = { ...DEFAULTS, ...around };
+  const temperature = readTemperatureSetting(given.temperature, fallback.temperature);
+  const air = readOneOf('air', given.air, AIRS, fallback.air);
+  const solids = readOneOf('solids', given.solids, SOLIDS, fallback.solids);
+  return {
+    value: { temperature: temperature.value, air: air.value, solids: solids.value },
+    notes: [temperature.note, air.note, solids.note].filter((note) => note !== undefined),
+    ...(temperature.problems ? { problems: temperature.problems } : {}),
+  };
 }
 
 export function readExpandedSetting(given: unknown): Reading<readonly Section[]> {

@@ -1,11 +1,8 @@
 import { createContext } from '@lit/context';
-import type { Air } from './card-settings.js';
+import type { StatedConditions } from './card-settings.js';
 
 /** Conditions that the page states once for all cards below; an absent one is left to the card. */
-export interface ProvidedConditions {
-  readonly temperature?: number;
-  readonly air?: Air;
-}
+export type ProvidedConditions = Partial<StatedConditions>;
 
 /** The key is registered by name, so that two copies of the package on a page share it. */
 export const conditionsContext = createContext<ProvidedConditions>(Symbol.for('solute-card/conditions'));

@@ -1,7 +1,7 @@
 import { ContextConsumer, ContextProvider } from '@lit/context';
 import { css, html, type TemplateResult } from 'lit';
 import { property } from 'lit/decorators.js';
-import { DEFAULT_AIR, DEFAULT_TEMPERATURE, readAirSetting, readTemperatureSetting } from './card-settings.js';
+import { readConditions } from './card-settings.js';
 import { conditionsContext, type ProvidedConditions } from './conditions-context.js';
 import { renderNotes } from './prediction-view.js';
 import { SoluteElement } from './solute-element.js';
@@ -14,6 +14,7 @@ import { SoluteElement } from './solute-element.js';
  *
  * @attr {string} temperature - Celsius, or a quantity with unit.
  * @attr {'excluded' | 'equilibrated'} air - Whether CO2 of the air is kept away.
+ * @attr {'watched' | 'equilibrated'} solids - Whether supersaturation is only reported, or solids may form.
  *
  * @csspart notes - Settings that were not understood.
  */
@@ -43,6 +44,7 @@ export class SoluteConditions extends SoluteElement {
 
   @property() temperature: number | string | null = null;
   @property() air: string | null = null;
+  @property() solids: string | null = null;
 
   readonly #provider = new ContextProvider(this, { context: conditionsContext, initialValue: {} });
   #outer: ProvidedConditions = {};
@@ -77,14 +79,10 @@ export class SoluteConditions extends SoluteElement {
 
   /** Cards that are connected in the same moment must find the value already. */
   #provide(): void {
-    const temperature = readTemperatureSetting(this.temperature, this.#outer.temperature ?? DEFAULT_TEMPERATURE);
-    const air = readAirSetting(this.air, this.#outer.air ?? DEFAULT_AIR);
-    const impossible = temperature.problems?.map(({ text }) => text) ?? [];
-    this.#notes = [...impossible, ...[temperature.note, air.note].filter((note) => note !== undefined)];
-    const { temperature: before, air: airBefore } = this.#provider.value;
-    if (temperature.value !== before || air.value !== airBefore) {
-      this.#provider.setValue({ temperature: temperature.value, air: air.value });
-    }
+    const { value, notes, problems = [] } = readConditions(this, this.#outer);
+    this.#notes = [...problems.map(({ text }) => text), ...notes];
+    const before = this.#provider.value;
+    if (value.temperature !== before.temperature || value.air !== before.air || value.solids !== before.solids) this.#provider.setValue(value);
   }
 
   protected override render(): TemplateResult {

@@ -7,12 +7,15 @@ import { english as strings } from './strings/english.js';
 
 const words = strings.equations;
 
-/** The equations of a prediction: dissolution, reactions with water, and what takes no part. */
+/** The equations of a prediction: dissolution, reactions with water, complexes, and what takes no part. */
 export function renderEquations(prediction: Prediction, numbers: Numbers): TemplateResult {
   const { dissociation, hydrolysis, spectators } = prediction;
+  const complexes = hydrolysis.filter(({ kind }) => kind === 'complex-formation');
+  const withWater = hydrolysis.filter(({ kind }) => kind !== 'complex-formation');
   return html`
     ${group(words.dissolution, dissociation, numbers)}
-    ${hydrolysis.length === 0 ? html`<p class="group-title">${words.none}</p>` : group(words.hydrolysis, hydrolysis, numbers)}
+    ${hydrolysis.length === 0 ? html`<p class="group-title">${words.none}</p>` : group(words.hydrolysis, withWater, numbers)}
+    ${group(words.complexes, complexes, numbers)}
     ${spectators.length === 0
       ? nothing
       : html`<p class="group-title">${words.spectators}</p>
@@ -52,22 +55,22 @@ function side(terms: readonly EquationTerm[]): TemplateResult[] {
   return terms.map((term, index) => (index === 0 ? renderTerm(term) : html` + ${renderTerm(term)}`));
 }
 
+/** A constant of proton transfer stands as itself and as pK, a cumulative one of a metal as its logarithm. */
 function renderConstant({ symbol, K, pK }: Equation, numbers: Numbers): TemplateResult | typeof nothing {
-  if (!symbol || K === undefined) return nothing;
+  if (!symbol || K === undefined || pK === undefined) return nothing;
+  if (isCumulative(symbol)) return html`<span class="fact constant" dir="ltr">log<sub>10</sub> ${renderSymbol(symbol)} = ${numbers.fixed(-pK, 2)}</span>`;
   const { mantissa, exponent } = numbers.powerOfTen(K);
-  const logarithm = pK === undefined ? nothing : html` <span class="logarithm">(${renderLogarithm(symbol, pK, numbers)})</span>`;
-  return html`<span class="fact constant" dir="ltr">${renderSymbol(symbol)} = ${mantissa} × 10<sup>${exponent}</sup>${logarithm}</span>`;
-}
-
-/** A constant of proton transfer is quoted as pK, a cumulative one of a metal as its logarithm. */
-function renderLogarithm(symbol: string, pK: number, numbers: Numbers): TemplateResult {
-  return isCumulative(symbol)
-    ? html`log<sub>10</sub> ${renderSymbol(symbol)} ${numbers.fixed(-pK, 2)}`
-    : html`p${renderSymbol(symbol)} ${numbers.fixed(pK, 2)}`;
+  return html`<span class="fact constant" dir="ltr">${renderSymbol(symbol)} = ${mantissa} × 10<sup>${exponent}</sup> <span class="logarithm">(p${renderSymbol(symbol)} ${numbers.fixed(pK, 2)})</span></span>`;
 }
 
 function isCumulative(symbol: string): boolean {
   return symbol.includes('β');
+}
+
+/** The constant as plain text: "pKa 9.25", "log10 β 12.75"; empty where there is none. */
+export function constantText({ symbol, pK }: Equation, numbers: Numbers): string {
+  if (!symbol || pK === undefined) return '';
+  return isCumulative(symbol) ? `${words.logarithm(symbol)} ${numbers.fixed(-pK, 2)}` : `${words.negativeLogarithm(symbol)} ${numbers.fixed(pK, 2)}`;
 }
 
 /** "Ka" with the letter as a subscript; the star of "*β" stays. */
@@ -79,17 +82,14 @@ function renderSymbol(symbol: string): TemplateResult {
 
 /** The equation as a sentence built from names. */
 export function spokenEquation(equation: Equation, numbers: Numbers): string {
-  const { reactants, products, arrow, symbol, K, pK, extent, decides } = equation;
+  const { reactants, products, arrow, symbol, pK, extent, decides } = equation;
   const facts = [`${spokenSide(reactants)} ${arrow === 'complete' ? words.complete : words.equilibrium} ${spokenSide(products)}`];
   if (symbol && pK !== undefined) {
     facts.push(
       isCumulative(symbol)
-        ? words.spokenConstant(words.logarithm(symbol), words.spokenPower(numbers.fixed(-pK, 2)))
-        : words.spokenConstant(words.negativeLogarithm(symbol), words.spokenPower(numbers.fixed(pK, 2))),
+        ? words.spokenConstant(words.logarithm(symbol), words.spokenSign(numbers.fixed(-pK, 2)))
+        : words.spokenConstant(words.negativeLogarithm(symbol), words.spokenSign(numbers.fixed(pK, 2))),
     );
-  } else if (symbol && K !== undefined) {
-    const { mantissa, exponent } = numbers.powerOfTen(K);
-    facts.push(words.spokenConstant(symbol, words.timesTenTo(mantissa, words.spokenPower(exponent))));
   }
   if (extent !== undefined) facts.push(words.reacted(numbers.percent(extent)));
   if (decides) facts.push(words.decides);

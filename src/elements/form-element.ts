@@ -51,12 +51,15 @@ export class SoluteFormElement extends SoluteElement {
   /** Gives the form what the element stands for and whether that is enough; undefined while it is not known. */
   protected setFormResult(outcome: Outcome | undefined, anchor: HTMLElement | undefined): void {
     const { internals } = this;
-    internals.setFormValue(outcome?.state === 'predicted' ? JSON.stringify(outcome.record) : null);
+    // Only a named value is submitted. Nothing is left for the browser to keep of it: it would write the records of all
+    // cards into the session history again and again.
+    const value = this.name && outcome?.state === 'predicted' ? JSON.stringify(outcome.record) : null;
+    internals.setFormValue(value, value === null ? null : '');
     if (outcome?.state === 'problem') {
       internals.setValidity({ customError: true }, outcome.problems.map(({ text }) => text).join(' '), anchor);
     } else if (this.required && outcome?.state !== 'predicted') {
       internals.setValidity({ valueMissing: true }, outcome ? strings.validity.missing : strings.validity.pending, anchor);
-    } else {
+    } else if (!internals.validity.valid) {
       internals.setValidity({});
     }
   }

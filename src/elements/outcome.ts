@@ -1,5 +1,5 @@
-import { createRecord, predict, SoluteError, type Conditions, type Prediction, type Problem, type SoluteRecord } from '../engine.js';
-import { isEmpty, solutesText, type SolutesGiven } from './card-settings.js';
+import { createRecord, predict, SoluteError, type Prediction, type Problem, type SoluteRecord } from '../engine.js';
+import { isEmpty, solutesText, type SolutesGiven, type StatedConditions } from './card-settings.js';
 import { english as strings } from './strings/english.js';
 
 /** What the input of a card came to. */
@@ -12,7 +12,7 @@ export interface OutcomeInput {
   readonly solutes: SolutesGiven;
   readonly label: string;
   readonly volume: string;
-  readonly conditions: Pick<Conditions, 'temperature' | 'air'>;
+  readonly conditions: StatedConditions;
 }
 
 /** Predicts; no exception leaves it. */

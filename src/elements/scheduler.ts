@@ -1,10 +1,12 @@
 /**
  * One queue of work for all cards of a page. A single card is served in the microtask after its change; many cards
- * are served in slices, so that no task blocks the page.
+ * are served in slices, each a task of its own, so that no task blocks the page and none is joined to a frame.
  */
 
-/** Milliseconds of work between two frames. */
+/** Milliseconds of work in one task. */
 const SLICE = 8;
+/** Slices between two frames: enough that drawing does not cost more than the work, few enough that the page moves. */
+const SLICES_PER_FRAME = 3;
 /** Milliseconds without a frame after which the page is taken to be in the background, where nobody waits for frames. */
 const LONGEST_WAIT = 100;
 
@@ -12,6 +14,7 @@ type Work = () => void;
 
 const queue: Work[] = [];
 let first = 0;
+/** What is left of the time that work may take in the present frame without a task of its own. */
 let left = SLICE;
 let microtaskPending = false;
 let framePending = false;
@@ -27,30 +30,38 @@ export function schedule<Result>(work: () => Result): Promise<Result> {
         reject(error instanceof Error ? error : new Error(String(error)));
       }
     });
-    if (left > 0 && !microtaskPending) {
+    if (left <= 0) {
+      requestFrame();
+    } else if (!microtaskPending) {
       microtaskPending = true;
       queueMicrotask(() => {
         microtaskPending = false;
-        runSlice();
+        const start = performance.now();
+        runUntil(start + left);
+        left -= performance.now() - start;
+        requestFrame();
       });
-    } else if (left <= 0) {
-      requestFrame();
     }
   });
 }
 
-function runSlice(): void {
-  const start = performance.now();
-  while (first < queue.length && performance.now() - start < left) queue[first++]?.();
-  left -= performance.now() - start;
+function runUntil(end: number): void {
+  while (first < queue.length && performance.now() < end) queue[first++]?.();
   if (first === queue.length) {
     queue.length = 0;
     first = 0;
   }
-  requestFrame();
 }
 
-/** Asks for the next frame, which brings a full slice; also when the queue is empty, so that the slice is renewed. */
+/** Slices that follow each other as tasks, then the next frame. */
+function runSlices(number: number): void {
+  runUntil(performance.now() + SLICE);
+  if (first === queue.length) left = SLICE;
+  else if (number > 1) afterTask(() => runSlices(number - 1));
+  else requestFrame();
+}
+
+/** Asks for the next frame, after which work goes on; also when the queue is empty, so that the time of the microtask is renewed. */
 function requestFrame(): void {
   if (framePending) return;
   framePending = true;
@@ -59,8 +70,8 @@ function requestFrame(): void {
     if (served) return;
     served = true;
     framePending = false;
-    left = SLICE;
-    if (first < queue.length) runSlice();
+    if (first === queue.length) left = SLICE;
+    else afterTask(() => runSlices(SLICES_PER_FRAME));
   };
   let timer: ReturnType<typeof setTimeout> | undefined;
   if (framesStopped) {

@@ -1,15 +1,17 @@
-import { formatEquation, type Conditions, type Prediction } from '../engine.js';
+import { formatEquation, type Prediction } from '../engine.js';
 import { classificationText } from './announcements.js';
+import type { StatedConditions } from './card-settings.js';
 import { sorted } from './cautions.js';
 import { chemicalMarkup, escapeMarkup, formulaMarkup } from './chemical.js';
+import { constantText } from './equation.js';
 import type { Numbers } from './numbers.js';
 import type { Outcome } from './outcome.js';
 import { otherAir } from './scale.js';
 import { english as strings } from './strings/english.js';
 
-/** Temperature and air in words. */
-export function conditionsText({ temperature, air }: Pick<Conditions, 'temperature' | 'air'>, numbers: Numbers): string {
-  return strings.text.conditions(strings.temperature(numbers.plain(temperature)), strings.air[air]);
+/** Temperature, air and, when they may form, solids in words. */
+export function conditionsText({ temperature, air, solids }: StatedConditions, numbers: Numbers): string {
+  return [strings.temperature(numbers.plain(temperature)), strings.air[air], ...(solids === 'equilibrated' ? [strings.solidsFormed] : [])].join(', ');
 }
 
 /** pH under the other condition of air as a phrase, when it differs by more than the uncertainty. */
@@ -44,6 +46,8 @@ export function writeText(outcome: Outcome, label: string, numbers: Numbers): st
     `${resultText(prediction, numbers)}, ${conditionsText(prediction.conditions, numbers)}.`,
     ...(other ? [`${other}.`] : []),
     `${prediction.understood.map((solute) => soluteText(solute, numbers)).join('; ')}.`,
+    ...doubts(prediction).map((text) => `${strings.checkBottle} ${text}`),
+    ...prediction.solids.filter(({ amount }) => amount !== undefined).map((solid) => `${solidText(solid, numbers)}.`),
     prediction.reason.text,
     ...prediction.hydrolysis.filter(({ decides }) => decides).map((equation) => `${formatEquation(equation)}.`),
     ...sorted(prediction.cautions).map(({ gravity, text }) => `${strings.cautions.gravity[gravity]}: ${text}`),
@@ -63,9 +67,8 @@ export function writeMarkup(outcome: Outcome, label: string, numbers: Numbers): 
   const equations = [...prediction.dissociation, ...prediction.hydrolysis].map((equation) => {
     const side = (terms: typeof equation.reactants) =>
       terms.map(({ coefficient, chemical }) => `${coefficient === 1 ? '' : `${coefficient} `}${chemicalMarkup(chemical)}`).join(' + ');
-    const { symbol, pK, decides } = equation;
-    const constant = symbol && pK !== undefined ? ` (p${escapeMarkup(symbol)} ${numbers.fixed(pK, 2)})` : '';
-    return `${side(equation.reactants)} ${equation.arrow === 'complete' ? '→' : '⇌'} ${side(equation.products)}${constant}${decides ? `, ${strings.equations.decides}` : ''}`;
+    const constant = constantText(equation, numbers);
+    return `${side(equation.reactants)} ${equation.arrow === 'complete' ? '→' : '⇌'} ${side(equation.products)}${constant ? ` (${escapeMarkup(constant)})` : ''}${equation.decides ? `, ${strings.equations.decides}` : ''}`;
   });
   return [
     `<section lang="${strings.language}">`,
@@ -73,6 +76,8 @@ export function writeMarkup(outcome: Outcome, label: string, numbers: Numbers): 
     `<p><strong>${escapeMarkup(resultText(prediction, numbers))}</strong>, ${escapeMarkup(conditionsText(prediction.conditions, numbers))}. ${strings.text.standard}</p>`,
     other ? `<p>${escapeMarkup(other)}</p>` : '',
     list(prediction.understood.map((solute) => `${formulaMarkup(solute.formula)}${solute.name ? ` (${escapeMarkup(solute.name)})` : ''}: ${escapeMarkup(strings.molarity(numbers.amount(solute.molarity) ?? solute.molarity.toExponential(2)))}`)),
+    ...doubts(prediction).map((text) => `<p><strong>${strings.checkBottle}</strong> ${escapeMarkup(text)}</p>`),
+    ...prediction.solids.filter(({ amount }) => amount !== undefined).map((solid) => `<p>${escapeMarkup(solidText(solid, numbers))}</p>`),
     `<p>${escapeMarkup(prediction.reason.text)}</p>`,
     list(equations),
     list(sorted(prediction.cautions).map(({ gravity, text }) => `<strong>${strings.cautions.gravity[gravity]}.</strong> ${escapeMarkup(text)}`)),

@@ -1,5 +1,6 @@
 import { exp, log } from '../quantities/reproducible-math.js';
 import type { ChemicalSystem, SolidDefinition } from './chemical-system.js';
+import { ChangeOfBasis } from './change-of-basis.js';
 import { solveScaled } from './linear-algebra.js';
 import { SaturationConstraint } from './saturation.js';
 import { sharedStructure } from './shared-structure.js';
@@ -11,16 +12,6 @@ const MOST_STEPS = 200;
 const GRADIENT_TOLERANCE = 1e-13;
 const STEP_TOLERANCE = 1e-16;
 const NO_COLUMNS = new Int32Array(0);
-
-/** Share of a balance's terms above which one species is said to hold it. */
-const MOST_OF_A_BALANCE = 0.7;
-
-/** A multiple of one balance taken off another. */
-interface BasisChange {
-  readonly column: number;
-  readonly other: number;
-  readonly times: number;
-}
 
 /**
  * All balances at fixed activity coefficients, as one convex problem.
@@ -58,7 +49,7 @@ export class MassBalances {
   #lnWater = 0;
   readonly #lnTotals: Float64Array;
   readonly #arrays: BalanceArrays;
-  readonly #changes: BasisChange[] = [];
+  readonly #basis = new ChangeOfBasis();
   /** Molality of the species that take part in no reaction, 0 for all others. */
   readonly #fixed: Float64Array;
   readonly #gradient: Float64Array;
@@ -104,17 +95,8 @@ export class MassBalances {
     this.#trial = new Float64Array(size);
     this.#offset = new Float64Array(size);
     this.#scale = new Float64Array(size);
-    this.#arrays = {
-      size,
-      numbers: this.#numbers,
-      protons: this.#protons,
-      exponents: this.#exponents,
-      only: shared.only,
-      lnTotals: this.#lnTotals,
-      fixed: this.#fixed,
-      molality: this.molality,
-      unknowns: this.#unknowns,
-    };
+    const { protons, only } = shared;
+    this.#arrays = { size, numbers: this.#numbers, protons, exponents: this.#exponents, only, lnTotals: this.#lnTotals, fixed: this.#fixed, molality: this.molality, unknowns: this.#unknowns };
   }
 
   get lnProtonActivity(): number {
@@ -123,11 +105,7 @@ export class MassBalances {
 
   /** ln a of every component of the system, those held from outside included. */
   componentActivities(): Float64Array {
-    const unknowns = this.#unknowns.slice();
-    for (let place = this.#changes.length - 1; place >= 0; place--) {
-      const { column, other, times } = this.#changes[place]!;
-      unknowns[column] = unknowns[column]! - times * unknowns[other]!;
-    }
+    const unknowns = this.#basis.original(this.#unknowns);
     const activities = new Float64Array(this.#system.components.length);
     this.#system.components.forEach((component, index) => (activities[index] = component.lnActivity ?? 0));
     this.#free.forEach((component, i) => (activities[component] = unknowns[i]! - this.#shift[i]! * this.lnProtonActivity));
@@ -202,50 +180,13 @@ export class MassBalances {
     for (let i = 0; i < size; i++) this.#unknowns[i] = this.#unknowns[i]! + offset[i]!;
   }
 
-  /**
-   * Rewrites the balances so that the species that holds most of a component stands in that balance alone: every other
-   * balance in which it occurs has the right multiple of this one taken off. A balance then no longer is the small
-   * difference of large terms, as free ligand beside a strongly bound complex otherwise is.
-   */
+  /** See {@link ChangeOfBasis}; the proton numbers are counted from the components again. */
   rebase(): void {
-    const size = this.#size;
-    const last = size - 1;
+    const last = this.#size - 1;
     for (let i = 0; i < last; i++) this.#unknowns[i] = this.#unknowns[i]! - this.#shift[i]! * this.#unknowns[last]!;
     this.#setShift(null);
-    for (let column = 0; column < last; column++) {
-      const species = this.#holderOf(column);
-      if (species < 0) continue;
-      const own = this.#numbers[species * size + column]!;
-      for (let other = 0; other < size; other++) {
-        const times = this.#numbers[species * size + other]! / own;
-        if (other !== column && times !== 0 && Number.isInteger(2 * times)) this.#takeOff({ column, other, times });
-      }
-    }
+    this.#basis.apply({ size: this.#size, numbers: this.#numbers, totals: this.#totals, unknowns: this.#unknowns, molality: this.molality });
     this.#compress();
-  }
-
-  /** The species that holds nearly all of a balance's terms; −1 for none. */
-  #holderOf(column: number): number {
-    let most = 0;
-    let holder = -1;
-    let sum = 0;
-    for (let j = 0; j < this.molality.length; j++) {
-      const term = Math.abs(this.#numbers[j * this.#size + column]!) * this.molality[j]!;
-      sum += term;
-      if (term <= most) continue;
-      most = term;
-      holder = j;
-    }
-    return most > MOST_OF_A_BALANCE * sum ? holder : -1;
-  }
-
-  #takeOff(operation: BasisChange): void {
-    const { column, other, times } = operation;
-    const size = this.#size;
-    this.#changes.push(operation);
-    for (let j = 0; j < this.molality.length; j++) this.#numbers[j * size + other] = this.#numbers[j * size + other]! - times * this.#numbers[j * size + column]!;
-    this.#totals[other] = this.#totals[other]! - times * this.#totals[column]!;
-    this.#unknowns[column] = this.#unknowns[column]! + times * this.#unknowns[other]!;
   }
 
   /**
@@ -314,7 +255,7 @@ export class MassBalances {
       protons -= number * this.#shift[i]!;
     }
     numbers[this.#size - 1] = protons;
-    for (const { column, other, times } of this.#changes) numbers[other] = numbers[other]! - times * numbers[column]!;
+    this.#basis.renumber(numbers);
     return numbers;
   }
 

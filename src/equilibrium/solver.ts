@@ -84,6 +84,33 @@ export function solveEquilibrium(system: ChemicalSystem, table: InteractionTable
   };
 }
 
+/**
+ * Composition at a pH that is held from outside, by whatever strong acid or base it takes; the ions of that acid or base
+ * are not among the species. Solids are not formed.
+ */
+export function solveAtPH(system: ChemicalSystem, table: InteractionTable, pH: number, start?: EquilibriumState): EquilibriumState {
+  const count = system.species.length;
+  const balances = new MassBalances(system);
+  const coefficients = new Float64Array(count + 1);
+  if (start) coefficients.set(start.lnGamma);
+  balances.estimate(coefficients);
+  balances.saturate([{ id: 'held pH', lnK: -pH * LN10, protons: 1, water: 0, stoichiometry: [] }]);
+  const round = settle(balances, table, coefficients);
+  balances.minimise(coefficients, 0);
+  return {
+    converged: round.settled,
+    pH,
+    molality: balances.molality,
+    lnGamma: coefficients.slice(0, count),
+    ionicStrength: round.ionicStrength,
+    lnWaterActivity: coefficients[count]!,
+    lnActivity: balances.componentActivities(),
+    solidAmounts: new Float64Array(system.solids?.length ?? 0),
+    residual: balances.residual(),
+    iterations: round.iterations,
+  };
+}
+
 /** Brings activity coefficients and balances to agree, for the solids now present. */
 function settle(balances: MassBalances, table: InteractionTable, coefficients: Float64Array): { settled: boolean; ionicStrength: number; iterations: number } {
   const last = coefficients.length - 1;

@@ -35,10 +35,12 @@ export function predict(solutes: string | readonly SoluteInput[], input: Predict
   return solvedPrediction({ conditions, water, dissolved, solved, other: () => solve(dissolved, water, conditions, !open) });
 }
 
-function solve(dissolved: Dissolved, water: Water, { solids, carbonDioxide }: Conditions, inAir: boolean): SolvedSolution {
+/** Solves what was dissolved. @throws SoluteError when it does not converge. */
+export function solve(dissolved: Pick<Dissolved, 'solutes' | 'particles'>, water: Water, { solids, carbonDioxide }: Conditions, inAir: boolean, start?: SolvedSolution): SolvedSolution {
   const open = solutionModel(dissolved.particles, water, inAir ? carbonDioxide : undefined);
   const model = solids === 'equilibrated' ? { ...open, system: { ...open.system, solids: formingSolids(open.solids, dissolved).map(({ definition }) => definition) } } : open;
-  const state = solveEquilibrium(model.system, model.table);
+  const neighbour = start?.model.system.structure === model.system.structure ? start?.state : undefined;
+  const state = solveEquilibrium(model.system, model.table, neighbour);
   if (!state.converged || !Number.isFinite(state.pH)) {
     throw new SoluteError([
       problem('not-converged', `The equilibrium of this mixture did not settle to the required accuracy (residual ${state.residual.toExponential(1)}). Check the amounts for a slip of a power of ten.`, ''),
@@ -61,7 +63,7 @@ function oneOf<Value extends string>(given: unknown, values: readonly Value[], s
 }
 
 /** Reads the conditions from anything a page may have passed. */
-function readConditions(input: PredictionInput | null | undefined): Conditions {
+export function readConditions(input: PredictionInput | null | undefined): Conditions {
   const given = typeof input === 'object' && input !== null ? input : {};
   const temperature = readTemperature(given.temperature ?? DEFAULT_TEMPERATURE);
   const air = oneOf(given.air ?? 'excluded', AIR, 'Air');

@@ -11,7 +11,7 @@ import type { SolidMeaning } from './solution-model.js';
 const LOWEST_INDEX = -3;
 
 /** The solids that may form while a beaker is watched, and those that were put in. */
-export function formingSolids(solids: readonly SolidMeaning[], { solutes }: Dissolved): SolidMeaning[] {
+export function formingSolids(solids: readonly SolidMeaning[], { solutes }: Pick<Dissolved, 'solutes'>): SolidMeaning[] {
   const putIn = new Set(solutes.map(({ read }) => withoutWater(read.substance.formula)));
   return solids.filter(({ solid }) => solid.forms === 'readily' || putIn.has(withoutWater(solid.formula)));
 }

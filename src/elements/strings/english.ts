@@ -1,4 +1,4 @@
-import type { Caution, ConstantUsed, Prediction, UncertaintyContribution } from '../../engine.js';
+import type { Caution, ConstantUsed, Prediction, SolidStatus, UncertaintyContribution } from '../../engine.js';
 
 /** Every word the elements show or say. Numbers arrive formatted. */
 export const english = {
@@ -13,6 +13,7 @@ export const english = {
   resultSpoken: (value: string, uncertainty: string) => `p H ${value}, plus or minus ${uncertainty}`,
   uncertaintyKind: 'standard uncertainty',
   temperature: (celsius: string) => `${celsius} °C`,
+  solidsFormed: 'solids let form',
   air: { excluded: 'air kept out', equilibrated: 'in equilibrium with room air' },
   neutralAt: (value: string) => `neutral at ${value}`,
   inRoomAir: (value: string) => `In equilibrium with room air: ${value}`,
@@ -26,6 +27,7 @@ export const english = {
   },
 
   understood: 'Understood as',
+  checkBottle: 'Check the bottle.',
   molarMass: (value: string) => `${value} g/mol`,
   molarity: (value: string) => `${value} mol/L`,
   molality: (value: string) => `${value} mol/kg`,
@@ -35,12 +37,14 @@ export const english = {
   counts: {
     equations: (count: string) => count,
     species: (count: string) => `${count} species`,
+    speciesAndSolids: (species: string, solids: string, one: boolean) => `${species} species, ${solids} ${one ? 'solid' : 'solids'}`,
     constants: (count: string) => `${count} used`,
   },
 
   equations: {
     dissolution: 'On dissolving',
     hydrolysis: 'With water',
+    complexes: 'Complexes',
     spectators: 'Taking no part',
     decides: 'decides the pH',
     reacted: (percent: string) => `${percent} reacted`,
@@ -50,8 +54,7 @@ export const english = {
     negativeLogarithm: (symbol: string) => `p${symbol}`,
     logarithm: (symbol: string) => `log10 ${symbol}`,
     spokenConstant: (symbol: string, value: string) => `${symbol} is ${value}`,
-    timesTenTo: (mantissa: string, exponent: string) => `${mantissa} times ten to the power ${exponent}`,
-    spokenPower: (value: string) => value.replace('−', 'minus '),
+    spokenSign: (value: string) => value.replace('−', 'minus '),
     none: 'Nothing dissolved reacts with water.',
   },
 
@@ -70,6 +73,16 @@ export const english = {
     waterActivity: 'Activity of water',
     neutralPoint: 'Neutral point',
     residual: 'Largest balance residual',
+  },
+
+  solids: {
+    caption: 'Solids this solution can form. Above 0 it holds more than the solid leaves dissolved.',
+    solid: 'Solid',
+    saturationIndex: 'Saturation index',
+    forms: 'Forms',
+    formation: { readily: 'readily', slowly: 'slowly', 'only-aged': 'only on ageing' } satisfies Record<SolidStatus['forms'], string>,
+    lies: (amount: string) => `lies as solid: ${amount} mol/kg`,
+    liesAs: (formula: string, name: string, amount: string) => `${formula} (${name}) lies as solid: ${amount} mol/kg`,
   },
 
   constants: {
@@ -131,7 +144,19 @@ export const english = {
     stored: 'Stored',
     storedAs: (reference: string) => `Stored as ${reference}`,
     failed: (reason: string) => (reason ? `Not stored: ${reason}` : 'Not stored.'),
-    announced: 'Announced to the page',
+    announced: 'Handed to the page, which has not confirmed it',
+  },
+
+  restored: {
+    figures: (value: string, uncertainty: string, classification: string) => `pH ${value} ± ${uncertainty}, ${classification}`,
+    changed: (stored: string, now: string) => `Stored as ${stored}. Computed now: ${now}.`,
+    sameDigits: (stored: string) => `Stored as ${stored}. Computed now, it is the same to the digits shown.`,
+    notComputable: (stored: string) => `Stored as ${stored}. What was typed is no longer understood.`,
+    constants: 'Constants that changed since:',
+    constant: (name: string, stored: string, now: string) => `${name}: ${stored}, now ${now}`,
+    absent: 'not used',
+    more: (count: string) => `${count} more`,
+    tampered: 'This is not what was stored: the record was altered, or is none. The result here is computed anew from what it says was dissolved.',
   },
 
   announcement: {
@@ -149,7 +174,6 @@ export const english = {
 
   text: {
     result: (value: string, uncertainty: string, classification: string) => `pH ${value} ± ${uncertainty} (${classification})`,
-    conditions: (temperature: string, air: string) => `${temperature}, ${air}`,
     standard: 'The number after ± is the standard uncertainty.',
     noPrediction: 'No prediction.',
   },

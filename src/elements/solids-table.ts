@@ -1,0 +1,49 @@
+import { html, nothing, type TemplateResult } from 'lit';
+import { formatChemical, type Prediction, type SolidStatus } from '../engine.js';
+import { renderAmount } from './amount.js';
+import { renderFormula } from './chemical.js';
+import { decimalsFor, type Numbers } from './numbers.js';
+import { english as strings } from './strings/english.js';
+
+const words = strings.solids;
+/** Saturation index above which a solid is near enough to be named. */
+const NEAR = -1;
+
+/** The solids that lie in the vessel or are near to forming. */
+export function nearSolids({ solids }: Prediction): readonly SolidStatus[] {
+  return solids.filter(({ saturationIndex, amount }) => amount !== undefined || saturationIndex > NEAR);
+}
+
+/** Near solids with how far the solution is from them; nothing where there is none. */
+export function renderSolids(prediction: Prediction, numbers: Numbers): TemplateResult | typeof nothing {
+  const solids = nearSolids(prediction);
+  if (solids.length === 0) return nothing;
+  return html`
+    <table part="solids-table">
+      <caption>${words.caption}</caption>
+      <thead>
+        <tr>
+          <th scope="col">${words.solid}</th>
+          <th scope="col" class="number">${words.saturationIndex}</th>
+          <th scope="col">${words.forms}</th>
+        </tr>
+      </thead>
+      <tbody>
+        ${solids.map(
+          ({ formula, name, saturationIndex, uncertainty, forms, amount }) => html`<tr>
+            <th scope="row">
+              ${renderFormula(formula)}
+              <span class="sentence origin">${name}</span>
+              ${amount === undefined ? nothing : html`<span class="sentence lies">${words.lies(amountText(amount, numbers))}</span>`}
+            </th>
+            <td class="number">
+              ${numbers.signed(saturationIndex, Math.min(2, decimalsFor(uncertainty)))}
+              <span class="origin">± ${numbers.fixed(uncertainty, Math.min(2, decimalsFor(uncertainty)))}</span>
+            </td>
+            <td>${words.formation[forms]}</td>
+          </tr>`,
+        )}
+      </tbody>
+    </table>
+  `;
+}
