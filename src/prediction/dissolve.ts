@@ -47,7 +47,7 @@ export function dissolve(solutes: readonly ReadSolute[], water: Water, volume: s
   const understood: UnderstoodSolute[] = [];
   solutes.forEach((read, index) => {
     const inMolality = read.amount.kind === 'molality';
-    const molality = inMolality ? read.amount.value.toNumber() : perLitre[index]!.toNumber() / litre.water;
+    const molality = inMolality ? read.amount.value.toNumber() : litre.molarities[index]! / litre.water;
     if (!(molality >= SMALLEST_MOLALITY && molality <= LARGEST_MOLALITY)) {
       problems.push(outOfRange(read, index, molality));
       return;
@@ -55,7 +55,7 @@ export function dissolve(solutes: readonly ReadSolute[], water: Water, volume: s
     const relative = read.amount.relativeHalfDigit / Math.sqrt(3);
     const basis = inMolality ? undefined : litre.bases[index]!;
     dissolved.push({ read, molality, uncertainty: molality * relative, ...(basis === undefined ? {} : { volumeBasis: basis }) });
-    understood.push(understand(read, inMolality ? molality * litre.water : perLitre[index]!.toNumber(), molality, basis));
+    understood.push(understand(read, litre.molarities[index]!, molality, basis));
   });
   if (problems.length > 0) throw new SoluteError(problems);
   return { solutes: dissolved, particles: sumParticles(dissolved), understood };
@@ -81,25 +81,32 @@ function refuse(solutes: readonly ReadSolute[], perLitre: readonly (Decimal | un
   if (problems.length > 0) throw new SoluteError(problems);
 }
 
-/** Passes in which the molarity of an amount per kilogram of water and the water in a litre come to agree. */
-const PASSES = 12;
+/** Passes in which molarities that depend on the density, and the density, come to agree. */
+const MOST_PASSES = 200;
+const AGREED = 1e-13;
 
-/** The litre that all solutes make. */
-function litreOf(solutes: readonly ReadSolute[], perLitre: readonly (Decimal | undefined)[], water: Water): LitreOfSolution {
-  const anyMolality = solutes.some(({ amount }) => amount.kind === 'molality');
+/** The litre that all solutes make; amounts per kilogram of water or of solution find their molarity in it. */
+function litreOf(solutes: readonly ReadSolute[], perLitre: readonly (Decimal | undefined)[], water: Water): LitreOfSolution & { readonly molarities: readonly number[] } {
+  const fixed = solutes.every(({ amount }) => amount.kind !== 'molality' && amount.kind !== 'mass-fraction');
   let litre: LitreOfSolution = { water: water.density / 1000, bases: [] };
-  for (let pass = 0; pass < (anyMolality ? PASSES : 1); pass++) {
+  let mass = litre.water;
+  let molarities: number[] = [];
+  for (let pass = 0; pass < MOST_PASSES; pass++) {
+    molarities = solutes.map(({ amount, substance }, index) => {
+      if (amount.kind === 'molality') return amount.value.toNumber() * litre.water;
+      if (amount.kind === 'mass-fraction') return (amount.value.toNumber() * mass * 1000) / substance.molarMass;
+      return perLitre[index]!.toNumber();
+    });
+    const before = mass;
     litre = litreOfSolution(
-      solutes.map(({ amount, substance }, index) => ({
-        molarity: amount.kind === 'molality' ? amount.value.toNumber() * litre.water : perLitre[index]!.toNumber(),
-        anhydrousMass: substance.anhydrousMass,
-        particles: substance.parts.map(({ particle, count }) => ({ id: particle.id, count })),
-      })),
+      solutes.map(({ substance }, index) => ({ molarity: molarities[index]!, anhydrousMass: substance.anhydrousMass, particles: substance.parts.map(({ particle, count }) => ({ id: particle.id, count })) })),
       water.temperature,
       water.density,
     );
+    mass = litre.water + solutes.reduce((sum, { substance }, index) => sum + (molarities[index]! * substance.anhydrousMass) / 1000, 0);
+    if (fixed || Math.abs(mass - before) < AGREED * mass) break;
   }
-  return litre;
+  return { ...litre, molarities };
 }
 
 function outOfRange(read: ReadSolute, index: number, molality: number): Problem {
@@ -107,7 +114,7 @@ function outOfRange(read: ReadSolute, index: number, molality: number): Problem 
   return problem('amount-out-of-range', `${quote(`${read.amount.number} ${read.amount.unit}`)} of ${read.substance.formula} is ${limit}. Check the number and the unit.`, read.typed, { range: read.range, solute: index });
 }
 
-/** mol per litre of solution; undefined when the volume is missing. For molalities the value is not used. */
+/** mol per litre of solution; undefined when the volume is missing. Amounts per mass of water or solution are not read from it. */
 function molesPerLitre(read: ReadSolute, litres: Decimal | undefined): Decimal | undefined {
   const { kind, value } = read.amount;
   const moles = kind === 'mass' || kind === 'mass-concentration' ? value.div(read.substance.molarMass) : value;
@@ -145,6 +152,7 @@ function understand(read: ReadSolute, molarity: number, molality: number, basis:
   if (substance.isomers) assumptions.push({ code: 'isomer', text: `Read as ${substance.name ?? substance.formula}; ${substance.isomers.join(', ')} has the same formula.` });
   if (amount.decimalComma) assumptions.push({ code: 'decimal-comma', text: `${amount.number} was read with a decimal comma.` });
   if (amount.kind === 'molality') assumptions.push({ code: 'per-kilogram-water', text: 'mol/kg is taken per kilogram of water.' });
+  if (amount.kind === 'mass-fraction') assumptions.push({ code: 'per-mass-of-solution', text: 'Percent by mass is taken of the whole solution.' });
   if (basis === 'unknown' && molarity > NOTEWORTHY_MOLARITY) assumptions.push({ code: 'volume-unknown', text: 'The volume it takes up in solution is not known here and is left out.' });
   return {
     typed: read.typed,

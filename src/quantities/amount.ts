@@ -1,14 +1,14 @@
-import type { Decimal } from './decimal.js';
+import { Decimal } from './decimal.js';
 import { exp10 } from './reproducible-math.js';
 import { parseUnit, plainUnit, type Unit } from './units.js';
 
 /** What kind of statement an amount is, and so what it needs to become mol per kilogram of water. */
-export type AmountKind = 'amount-concentration' | 'mass-concentration' | 'molality' | 'amount' | 'mass';
+export type AmountKind = 'amount-concentration' | 'mass-concentration' | 'mass-fraction' | 'molality' | 'amount' | 'mass';
 
 /** An amount as typed, exact. */
 export interface Amount {
   readonly kind: AmountKind;
-  /** mol/L, g/L, mol/kg, mol or g, by kind. */
+  /** mol/L, g/L, g/g, mol/kg, mol or g, by kind. */
   readonly value: Decimal;
   /** Half of the last digit typed, relative to the value. */
   readonly relativeHalfDigit: number;
@@ -37,7 +37,7 @@ const UNIT_KINDS: readonly (readonly [AmountKind, number, number, number, string
 
 /** Units that mean two things in a laboratory; each with the question that settles it. */
 const AMBIGUOUS: Readonly<Record<string, readonly [question: string, ...instead: string[]]>> = {
-  '%': ['Percent of what: mass in volume or mass in mass? Write it as g/L.', 'g/L'],
+  '%': ['Percent of what: mass in volume (% w/v, g in 100 mL of solution) or mass in mass (% w/w, g in 100 g of solution)?', '% w/v', '% w/w'],
   N: ['Normality depends on the reaction: how many equivalents per mole? Write mol/L.', 'mol/L'],
   m: ['Molal is written mol/kg here, since m is the metre.', 'mol/kg'],
   ppm: ['Parts per million by mass or by volume? Write mg/L or mg/kg as mol/L.', 'mg/L'],
@@ -69,20 +69,56 @@ export function readAmount(number: string, unit: string): Amount | AmountFailure
     const [question, ...instead] = AMBIGUOUS[code]!;
     return { failure: 'unit-ambiguous', question, instead };
   }
+  const percent = PERCENT.exec(unit) ?? (WEIGHT_PERCENT.test(unit) ? ['', 'w/w'] : null);
+  if (percent) return percentAmount(percent[1], { number, unit, mantissa, exponent, comma });
   const parsed = parseUnit(unit);
   if (!parsed) return { failure: 'unit-unknown' };
   const kind = UNIT_KINDS.find(([, amount, mass, length]) => sameDimension(parsed, amount, mass, length));
   if (!kind) return { failure: 'unit-not-an-amount' };
-  const point = mantissa.indexOf('.');
-  const halfDigit = 0.5 * exp10(point < 0 ? 0 : point + 1 - mantissa.length);
   return {
     kind: kind[0],
     value: factorOf(parsed, kind[4]).times(`${mantissa.replace(/\.$/, '')}e${exponent ?? 0}`),
-    relativeHalfDigit: halfDigit / Number(mantissa),
+    relativeHalfDigit: relativeHalfDigit(mantissa),
     number,
     unit,
     decimalComma: comma,
   };
+}
+
+/** The laboratory's percentages: mass in volume and mass in mass, with or without brackets. */
+const PERCENT = /^%\s*\(?\s*([wm]\/[vw]|m\/m|wt)\s*\)?$/i;
+const WEIGHT_PERCENT = /^wt\.?\s*-?%$/i;
+
+interface PercentParts {
+  readonly number: string;
+  readonly unit: string;
+  readonly mantissa: string;
+  readonly exponent: string | undefined;
+  readonly comma: boolean;
+}
+
+/** "% w/v" is g in 100 mL of solution, "% w/w" g in 100 g of solution. */
+function percentAmount(of: string, { number, unit, mantissa, exponent, comma }: PercentParts): Amount {
+  const inVolume = /\/v$/i.test(of);
+  return {
+    kind: inVolume ? 'mass-concentration' : 'mass-fraction',
+    value: new Decimal(`${mantissa.replace(/\.$/, '')}e${exponent ?? 0}`).times(inVolume ? 10 : '0.01'),
+    relativeHalfDigit: relativeHalfDigit(mantissa),
+    number,
+    unit,
+    decimalComma: comma,
+  };
+}
+
+/** Half of the last digit typed, relative to the number. */
+function relativeHalfDigit(mantissa: string): number {
+  const point = mantissa.indexOf('.');
+  return (0.5 * exp10(point < 0 ? 0 : point + 1 - mantissa.length)) / Number(mantissa);
+}
+
+/** Length of a percentage at the start of a text, 0 when there is none. */
+export function percentLength(text: string): number {
+  return /^(?:%[ \u00a0\u2009\u202f]?\(?(?:[wm]\/[vw]|m\/m|wt)\)?|wt\.?-?%)(?=[\s;,]|$)/i.exec(text)?.[0].length ?? 0;
 }
 
 const FACTORS = new WeakMap<Unit, Decimal>();

@@ -1,4 +1,4 @@
-import { numberLength, readAmount, type Amount, type AmountFailure } from '../quantities/amount.js';
+import { numberLength, percentLength, readAmount, type Amount, type AmountFailure } from '../quantities/amount.js';
 import { problem, quote, SoluteError, type Problem, type ProblemCode, type Suggestion, type TextRange } from '../quantities/solute-error.js';
 import { parseUnit } from '../quantities/units.js';
 import { identifySubstance, type IdentifiedSubstance } from './identify.js';
@@ -154,6 +154,9 @@ function splitAmount(text: string): { amount: Piece; substance: Piece } | undefi
 function amountAtStart(text: string): number | undefined {
   const number = numberLength(text);
   if (number === 0) return undefined;
+  const gap = new RegExp(`^${SPACE}*`).exec(text.slice(number))![0].length;
+  const percent = percentLength(text.slice(number + gap));
+  if (percent > 0) return number + gap + percent;
   const glued = /^[^\s;]*/u.exec(text.slice(number))![0];
   if (glued !== '') return isUnitLike(glued) ? number + glued.length : undefined;
   const spaces = new RegExp(`^${SPACE}+`).exec(text.slice(number))?.[0].length ?? 0;

@@ -122,3 +122,23 @@ describe('amounts', () => {
     }
   });
 });
+
+describe('percentages', () => {
+  // Meaning of w/v and w/w: Ph. Eur. 1.4 and IUPAC Green Book 2.10 (mass concentration, mass fraction).
+  for (const unit of ['% w/v', '%w/v', '% (w/v)', '% m/V']) {
+    it(`${unit} is gram in 100 mL`, () => {
+      const amount = readAmount('5.0', unit);
+      assert.ok(!('failure' in amount) && amount.kind === 'mass-concentration' && amount.value.eq(50), unit);
+    });
+  }
+  for (const unit of ['% w/w', '%(w/w)', '% m/m', 'wt%', 'wt.-%']) {
+    it(`${unit} is gram in 100 g of solution`, () => {
+      const amount = readAmount('5.0', unit);
+      assert.ok(!('failure' in amount) && amount.kind === 'mass-fraction' && amount.value.eq('0.05'), unit);
+    });
+  }
+  it('a bare % stays a question', () => {
+    const amount = readAmount('5', '%');
+    assert.ok('failure' in amount && amount.failure === 'unit-ambiguous' && amount.instead?.length === 2);
+  });
+});
