@@ -16,7 +16,7 @@ export function announcementOf(outcome: Outcome, label: string, numbers: Numbers
 }
 
 /** The class in words, with the doubt when the uncertainty reaches across its boundary. */
-export function classificationText({ classification, decided }: Prediction): string {
+export function classificationText({ classification, decided }: Pick<Prediction, 'classification' | 'decided'>): string {
   const word = strings.classification[classification];
   return decided ? word : `${word}, ${strings.undecided}`;
 }

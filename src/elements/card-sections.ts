@@ -4,6 +4,7 @@ import type { Section } from './card-settings.js';
 import { renderConstants } from './constants-table.js';
 import { renderEquations } from './equation.js';
 import type { Numbers } from './numbers.js';
+import { nearSolids } from './solids-table.js';
 import { renderComposition } from './species-table.js';
 import { english as strings } from './strings/english.js';
 
@@ -20,11 +21,12 @@ export interface SectionsView {
 export function renderSections(view: SectionsView): TemplateResult {
   const { prediction, numbers } = view;
   const { dissociation, hydrolysis, species, constants } = prediction;
+  const solids = nearSolids(prediction).length;
   const count = (value: number) => numbers.fixed(value, 0);
   return html`
     <div class="sections" part="sections">
       ${section(view, 'equations', strings.counts.equations(count(dissociation.length + hydrolysis.length)), renderEquations)}
-      ${section(view, 'composition', strings.counts.species(count(species.length)), renderComposition)}
+      ${section(view, 'composition', solids === 0 ? strings.counts.species(count(species.length)) : strings.counts.speciesAndSolids(count(species.length), count(solids), solids === 1), renderComposition)}
       ${section(view, 'constants', strings.counts.constants(count(constants.length)), renderConstants)}
     </div>
   `;

@@ -255,6 +255,7 @@ const readingStyles = css`
   .tick {
     stroke: var(--_edge);
     stroke-width: 1;
+    vector-effect: non-scaling-stroke;
   }
   .tick-label {
     fill: var(--_muted);

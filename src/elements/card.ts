@@ -3,10 +3,7 @@ import { html, nothing, type PropertyValues, type TemplateResult } from 'lit';
 import { property } from 'lit/decorators.js';
 import type { Prediction, Problem, SoluteRecord } from '../engine.js';
 import { announcementOf } from './announcements.js';
-import {
-  DEFAULT_AIR, DEFAULT_TEMPERATURE, readAirSetting, readExpandedSetting, readSolutes, readTemperatureSetting, solutesText,
-  type Section, type SolutesGiven,
-} from './card-settings.js';
+import { readConditions, readExpandedSetting, readSolutes, SECTIONS, solutesText, type Section, type SolutesGiven } from './card-settings.js';
 import { cardStyles } from './card.styles.js';
 import { renderSections, type SectionsView } from './card-sections.js';
 import { conditionsContext, type ProvidedConditions } from './conditions-context.js';
@@ -18,6 +15,7 @@ import { identityOf, outcomeOf, type Outcome } from './outcome.js';
 import { renderEmpty, renderNotes, renderPrediction } from './prediction-view.js';
 import { unwatchPrint, watchPrint, type Printable } from './print-watch.js';
 import { renderProblems } from './problems.js';
+import { noteOnRestored, renderRestoredNote, type RestoredNote } from './restored-note.js';
 import { schedule } from './scheduler.js';
 import { renderStoreButton } from './store-button.js';
 import { StoreProcess } from './store-process.js';
@@ -37,6 +35,7 @@ export type CardState = 'empty' | 'predicting' | 'predicted' | 'problem';
  * @attr {string} volume - Final volume, when amounts are masses or aliquots: `500 mL`.
  * @attr {string} temperature - Celsius, or a quantity with unit; from `<solute-conditions>` when absent, else 25.
  * @attr {'excluded' | 'equilibrated'} air - Whether CO2 of the air is kept away; from `<solute-conditions>` when absent.
+ * @attr {'watched' | 'equilibrated'} solids - Whether supersaturation is only reported, or solids may form and dissolve; from `<solute-conditions>` when absent.
  * @attr {string} expanded - Sections that start open: `equations composition constants`.
  * @attr {boolean} keep-text - Writes the result as text into the light DOM.
  * @attr {string} name - Name under which the record is submitted with a form.
@@ -51,23 +50,24 @@ export type CardState = 'empty' | 'predicting' | 'predicted' | 'problem';
  * @csspart label - The heading.
  * @csspart understood - List of what was understood.
  * @csspart solute - One dissolved substance.
- * @csspart assumption - What was taken for granted.
+ * @csspart assumption - What was taken for granted; where it may mean the wrong bottle also `assumption-doubt`.
  * @csspart value - The pH with its uncertainty.
  * @csspart ph - The number of the pH.
  * @csspart uncertainty - The uncertainty.
  * @csspart classification - The class in words with its shape.
  * @csspart scale - The pH scale.
- * @csspart conditions - Temperature and air.
+ * @csspart conditions - Temperature, air, and solids that may form.
  * @csspart reason - What decides the pH, in a sentence.
  * @csspart other-air - The pH under the other condition of air.
  * @csspart cautions - List of cautions.
  * @csspart caution - One caution; also `caution-danger`, `caution-warning`, `caution-note`.
  * @csspart sections - The sections that open.
- * @csspart section - One of them; also `section-equations`, `section-composition`, `section-constants`.
- * @csspart summary - Heading of a section.
+ * @csspart section - One of them; also `section-equations`, `section-composition`, `section-constants`, and `section-open` while it is open.
+ * @csspart summary - Button that opens a section.
  * @csspart equation - One equation; the one that decides is also `equation-decides`.
  * @csspart spectators - What takes no part.
  * @csspart composition-table - Species of the solution.
+ * @csspart solids-table - Solids that lie in the vessel or are near to forming.
  * @csspart constants-table - Constants used.
  * @csspart budget-table - What the uncertainty is made of.
  * @csspart store - The line with the store button.
@@ -78,6 +78,7 @@ export type CardState = 'empty' | 'predicting' | 'predicted' | 'problem';
  * @csspart problem - One problem.
  * @csspart typed - The input as typed with the offending pieces marked.
  * @csspart suggestions - What would be valid instead.
+ * @csspart restored - How a stored record differs from what is computed now.
  * @csspart notes - Settings that were not understood.
  *
  * @cssprop --solute-ink - Colour of text.
@@ -118,6 +119,7 @@ export class SoluteCard extends SoluteFormElement implements Printable {
   @property() volume = '';
   @property() temperature: number | string | null = null;
   @property() air: string | null = null;
+  @property() solids: string | null = null;
   @property() expanded = '';
   @property({ type: Boolean, attribute: 'keep-text' }) keepText = false;
 
@@ -127,6 +129,9 @@ export class SoluteCard extends SoluteFormElement implements Printable {
   /** What the outcome was made from; compared to tell whether it still holds. */
   #predictedFrom: readonly unknown[] | undefined;
   #notes: readonly string[] = [];
+  /** A record that was brought back and is to be compared with the next result. */
+  #restored: { readonly record: SoluteRecord } | undefined;
+  #restoredNote: RestoredNote | undefined;
   #source: Source = 'programmatic';
   #announced = '';
   #announcement = '';
@@ -134,6 +139,7 @@ export class SoluteCard extends SoluteFormElement implements Printable {
   #filled = new Set<Section>();
   #printing = false;
   #watched: Window | undefined;
+  #storeAwaited = false;
 
   constructor() {
     super();
@@ -185,15 +191,22 @@ export class SoluteCard extends SoluteFormElement implements Printable {
     return writeMarkup(this.#outcome, this.#heading, this.#numbers);
   }
 
-  /** Shows the input of a stored record and predicts it anew; the event that follows says `restore`. */
+  /**
+   * Shows the input of a stored record and predicts it anew; the event that follows says `restore`, and the card says
+   * where the result is no longer the stored one.
+   */
   restore(record: SoluteRecord): void {
-    this.solutes = record.solutes;
-    this.label = record.label ?? '';
     // A record comes back from a store, which may have handed over anything.
-    const conditions = (record.conditions as SoluteRecord['conditions'] | undefined) ?? undefined;
+    const { solutes, label, conditions } = (record ?? {}) as Partial<SoluteRecord>;
+    this.solutes = solutes ?? '';
+    this.label = label ?? '';
+    this.volume = conditions?.volume ?? '';
     this.temperature = conditions?.temperature ?? null;
     this.air = conditions?.air ?? null;
+    this.solids = conditions?.solids ?? null;
     this.#source = 'restore';
+    this.#restored = { record };
+    this.#predictedFrom = undefined;
     this.requestUpdate();
   }
 
@@ -236,26 +249,26 @@ export class SoluteCard extends SoluteFormElement implements Printable {
   protected override willUpdate(changed: PropertyValues<this>): void {
     if (changed.has('expanded')) this.#open = new Set(readExpandedSetting(this.expanded).value);
     if (this.#isStale()) this.#predict();
-    this.#notes = this.#readNotes();
-    const shown = this.#printing ? (['equations', 'composition', 'constants'] as const) : this.#open;
+    const { note } = readExpandedSetting(this.expanded);
+    this.#notes = [...readConditions(this, this.#provided).notes, ...(note === undefined ? [] : [note])];
+    const shown = this.#printing ? SECTIONS : this.#open;
     for (const section of shown) this.#filled.add(section);
   }
 
   #predict(): void {
     const before = this.#outcome;
     this.#predictedFrom = this.#inputs();
-    const temperature = this.#readTemperature();
-    const air = readAirSetting(this.air, this.#provided?.air ?? DEFAULT_AIR);
-    const solutes = readSolutes(this.solutes);
-    const impossible = temperature.problems;
-    this.#outcome = impossible
-      ? { state: 'problem', problems: impossible }
-      : outcomeOf({ solutes, label: this.#heading, volume: this.volume ?? '', conditions: { temperature: temperature.value, air: air.value } });
-    const identity = identityOf(this.#outcome);
-    if (identity === identityOf(before) && this.#outcome.state === before.state) return;
-    this.#store.reset();
+    const { value: conditions, problems } = readConditions(this, this.#provided);
+    this.#outcome = problems
+      ? { state: 'problem', problems }
+      : outcomeOf({ solutes: readSolutes(this.solutes), label: this.#heading, volume: this.volume ?? '', conditions });
+    this.#restoredNote = this.#restored && noteOnRestored(this.#restored.record, this.#outcome, this.#numbers);
+    this.#restored = undefined;
+    const changed = identityOf(this.#outcome) !== identityOf(before) || this.#outcome.state !== before.state;
+    if (changed) this.#store.reset();
     // The first result belongs to the page as it loads and interrupts nobody.
-    if (this.hasUpdated) this.#announcement = announcementOf(this.#outcome, this.#heading, this.#numbers);
+    if (!this.hasUpdated || !(changed || this.#restoredNote)) return;
+    this.#announcement = [announcementOf(this.#outcome, this.#heading, this.#numbers), this.#restoredNote?.text].filter(Boolean).join(' ');
   }
 
   protected override render(): TemplateResult {
@@ -268,6 +281,7 @@ export class SoluteCard extends SoluteFormElement implements Printable {
         aria-labelledby=${heading ? 'label' : nothing} aria-label=${heading ? nothing : strings.unnamed}>
         ${heading ? html`<p class="label" id="label" part="label" lang=${nearestLanguage(this)} dir="auto">${heading}</p>` : nothing}
         ${renderNotes(this.#notes)}
+        ${renderRestoredNote(this.#restoredNote)}
         ${outcome.state === 'empty' ? renderEmpty() : nothing}
         ${outcome.state === 'problem' ? renderProblems(outcome.problems, this.#typed, numbers) : nothing}
         ${outcome.state === 'predicted'
@@ -319,22 +333,13 @@ export class SoluteCard extends SoluteFormElement implements Printable {
   }
 
   #inputs(): readonly unknown[] {
-    return [this.solutes, this.label, this.volume, this.temperature, this.air, this.#provided?.temperature, this.#provided?.air];
+    return [this.solutes, this.label, this.volume, this.temperature, this.air, this.solids, ...Object.values(this.#provided ?? {})];
   }
 
   #isStale(): boolean {
     const { length } = this.#predictedFrom ?? [];
     const now = this.#inputs();
     return length !== now.length || now.some((value, index) => !Object.is(value, this.#predictedFrom![index]));
-  }
-
-  #readTemperature() {
-    return readTemperatureSetting(this.temperature, this.#provided?.temperature ?? DEFAULT_TEMPERATURE);
-  }
-
-  #readNotes(): readonly string[] {
-    const readings = [this.#readTemperature(), readAirSetting(this.air, this.#provided?.air ?? DEFAULT_AIR), readExpandedSetting(this.expanded)];
-    return readings.map(({ note }) => note).filter((note) => note !== undefined);
   }
 
   async #untilPredicted(): Promise<void> {
@@ -356,10 +361,19 @@ export class SoluteCard extends SoluteFormElement implements Printable {
     };
   }
 
+  /** Keeps the result that stands; while one is being made, that one. */
   readonly #onStore = (): void => {
     const { record } = this;
     if (record) this.#store.start(record);
+    else if (this.state === 'predicting' && !this.#storeAwaited) void this.#storeNext();
   };
+
+  async #storeNext(): Promise<void> {
+    this.#storeAwaited = true;
+    await this.predictionComplete;
+    this.#storeAwaited = false;
+    if (this.record && !this.inactive) this.#store.start(this.record);
+  }
 }
 
 declare global {

@@ -23,6 +23,24 @@ export const cautionStyles = css`
     color: var(--_gravity);
     font-weight: 600;
   }
+  .doubt {
+    display: flex;
+    flex-basis: 100%;
+    align-items: flex-start;
+    gap: var(--_space);
+    --_gravity: var(--_warning);
+  }
+  .doubt .icon {
+    flex: none;
+  }
+  .doubt strong {
+    color: var(--_warning);
+    font-weight: 600;
+  }
+  .restored {
+    padding: var(--_space) calc(1.5 * var(--_space));
+    border: 1px solid var(--_line);
+  }
   .icon {
     display: block;
     margin-block-start: 0.18em;

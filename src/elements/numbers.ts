@@ -38,6 +38,12 @@ export class Numbers {
     return this.#format(rounded, `f${decimals}`, { minimumFractionDigits: decimals, maximumFractionDigits: decimals });
   }
 
+  /** With its sign, except zero. */
+  signed(value: number, decimals: number): string {
+    const fixed = this.fixed(value, decimals);
+    return Number(value.toFixed(decimals)) > 0 ? `+${fixed}` : fixed;
+  }
+
   /** As few digits as the number has, at most so many decimals. */
   plain(value: number, decimals = 6): string {
     return this.#format(value, `p${decimals}`, { maximumFractionDigits: decimals });

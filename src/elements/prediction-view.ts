@@ -3,6 +3,7 @@ import type { Prediction, UnderstoodSolute } from '../engine.js';
 import { renderClassShape } from './class-shapes.js';
 import { renderFormula } from './chemical.js';
 import { renderAmount } from './amount.js';
+import { renderAssumptions, renderSharedAssumptions, sharedAssumptions } from './assumptions.js';
 import { renderCautions } from './cautions.js';
 import type { Numbers } from './numbers.js';
 import { renderScale } from './scale.js';
@@ -19,7 +20,7 @@ export function renderPrediction(prediction: Prediction, numbers: Numbers): Temp
     <ul class="understood" part="understood" aria-label=${strings.understood}>
       ${understood.map((solute) => renderSolute(solute, numbers, shared))}
     </ul>
-    ${shared.size === 0 ? nothing : html`<p class="assumption sentence" part="assumption">${[...shared].join(' ')}</p>`}
+    ${renderSharedAssumptions(shared)}
     <div class="reading">
       ${renderValue(prediction, numbers)}
       <div class="beside">
@@ -55,12 +56,6 @@ function renderValue(prediction: Prediction, numbers: Numbers): TemplateResult {
   `;
 }
 
-/** What was taken for granted of every solute is said once, below all of them. */
-function sharedAssumptions(understood: readonly UnderstoodSolute[]): ReadonlySet<string> {
-  const [first, ...others] = understood.map(({ assumptions }) => assumptions.map(({ text }) => text));
-  return new Set((first ?? []).filter((text) => others.every((texts) => texts.includes(text))));
-}
-
 function renderSolute(solute: UnderstoodSolute, numbers: Numbers, shared: ReadonlySet<string>): TemplateResult {
   const { amount, formula, name, cas, molarMass, molarity, molality, assumptions } = solute;
   return html`
@@ -72,7 +67,7 @@ function renderSolute(solute: UnderstoodSolute, numbers: Numbers, shared: Readon
         <span>${strings.molarMass(numbers.plain(Number(molarMass.toFixed(3))))}</span>
         ${cas ? html`<span>${strings.cas(cas)}</span>` : nothing}
       </span>
-      ${assumptions.map(({ text }) => (shared.has(text) ? nothing : html`<span class="assumption sentence" part="assumption">${text}</span>`))}
+      ${renderAssumptions(assumptions, shared)}
     </li>
   `;
 }

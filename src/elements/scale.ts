@@ -19,19 +19,16 @@ export function renderScale(prediction: Prediction, numbers: Numbers): TemplateR
   const band = Math.max(THINNEST_BAND, percent(pH + uncertainty) - percent(pH - uncertainty));
   const step = highest - lowest > 20 ? 5 : 2;
   const other = otherAir(prediction);
-  const ticks: TemplateResult[] = [];
-  for (let value = lowest; value <= highest; value++) {
-    const labelled = value % step === 0;
-    const end = labelled ? 26 : 23;
-    ticks.push(svg`<line class="tick" x1=${at(value)} x2=${at(value)} y1="18" y2=${end}></line>`);
-    if (labelled) ticks.push(svg`<text class="tick-label" x=${at(value)} y="39" text-anchor="middle">${numbers.fixed(value, 0)}</text>`);
-  }
+  const values = Array.from({ length: highest - lowest + 1 }, (_, index) => lowest + index);
+  const labelled = values.filter((value) => value % step === 0);
+  const ticks = values.map((value) => `M${value} 18V${labelled.includes(value) ? 26 : 23}`).join('');
   return html`
     <div class="scale" part="scale" dir="ltr">
       <svg role="img" aria-label=${describe(prediction, numbers, lowest, highest, other)} width="100%" height="42" focusable="false">
         <rect class="band" x=${`${(percent(pH) - band / 2).toFixed(2)}%`} width=${`${band.toFixed(2)}%`} y="14" height="8"></rect>
         <line class="rule" x1="0%" x2="100%" y1="18" y2="18"></line>
-        ${ticks}
+        <svg viewBox=${`${lowest} 0 ${highest - lowest} 42`} width="100%" height="42" preserveAspectRatio="none" overflow="visible"><path class="tick" d=${ticks}></path></svg>
+        ${labelled.map((value) => svg`<text class="tick-label" x=${at(value)} y="39" text-anchor="middle">${numbers.fixed(value, 0)}</text>`)}
         <line class="neutral-point" x1=${at(neutralPH)} x2=${at(neutralPH)} y1="10" y2="26"></line>
         ${other === undefined ? '' : svg`<line class="other-air" x1=${at(inAir)} x2=${at(withoutAir)} y1="18" y2="18"></line>
         <svg class="other-air" x=${at(other)} y="18" overflow="visible"><circle r="3"></circle></svg>`}

@@ -20,9 +20,12 @@ function finderOf(prediction: Prediction): FormulaFinder {
   return finder;
 }
 
-function makeFinder({ understood, reason, species, spectators }: Prediction): FormulaFinder {
+function makeFinder({ understood, reason, species, spectators, solids }: Prediction): FormulaFinder {
   const rendered = new Map<string, TemplateResult>();
-  for (const { formula, name } of understood) rendered.set(formula, name ? renderNamed(renderFormula(formula), name) : renderFormula(formula));
+  for (const { formula, name } of [...solids, ...understood]) {
+    const set = name ? renderNamed(renderFormula(formula), name) : renderFormula(formula);
+    rendered.set(formula, set).set(formatChemical({ label: formula, charge: 0 }), set);
+  }
   const chemicals = [reason.chemical, reason.against, ...species.map(({ chemical }) => chemical), ...spectators.map(({ chemical }) => chemical)];
   for (const chemical of chemicals) if (chemical) rendered.set(formatChemical(chemical), renderNamedChemical(chemical));
   const formulas = [...rendered.keys()].sort((one, other) => other.length - one.length).map((formula) => formula.replace(/[.*+?^${}()|[\]\\]/g, '\\$&'));

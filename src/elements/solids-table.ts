@@ -1,6 +1,6 @@
 import { html, nothing, type TemplateResult } from 'lit';
 import { formatChemical, type Prediction, type SolidStatus } from '../engine.js';
-import { renderAmount } from './amount.js';
+import { amountText, renderAmount } from './amount.js';
 import { renderFormula } from './chemical.js';
 import { decimalsFor, type Numbers } from './numbers.js';
 import { english as strings } from './strings/english.js';
@@ -34,11 +34,12 @@ export function renderSolids(prediction: Prediction, numbers: Numbers): Template
             <th scope="row">
               ${renderFormula(formula)}
               <span class="sentence origin">${name}</span>
-              ${amount === undefined ? nothing : html`<span class="sentence lies">${words.lies(amountText(amount, numbers))}</span>`}
+              ${amount === undefined ? nothing : html`<span class="sentence">${words.lies} <strong>${renderAmount(amount, numbers)} mol/kg</strong></span>`}
             </th>
             <td class="number">
-              ${numbers.signed(saturationIndex, Math.min(2, decimalsFor(uncertainty)))}
-              <span class="origin">± ${numbers.fixed(uncertainty, Math.min(2, decimalsFor(uncertainty)))}</span>
+              ${amount === undefined
+                ? html`${numbers.signed(saturationIndex, decimalsOf(uncertainty))}<span class="origin">± ${numbers.fixed(uncertainty, decimalsOf(uncertainty))}</span>`
+                : numbers.fixed(0, 0)}
             </td>
             <td>${words.formation[forms]}</td>
           </tr>`,
@@ -46,4 +47,11 @@ export function renderSolids(prediction: Prediction, numbers: Numbers): Template
       </tbody>
     </table>
   `;
+}
+
+const decimalsOf = (uncertainty: number) => Math.min(2, decimalsFor(uncertainty));
+
+/** A solid that lies in the vessel, as plain text. */
+export function solidText({ formula, name, amount = 0 }: SolidStatus, numbers: Numbers): string {
+  return words.liesAs(formatChemical({ label: formula, charge: 0 }), name, amountText(amount, numbers));
 }

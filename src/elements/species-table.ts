@@ -3,6 +3,7 @@ import type { Prediction } from '../engine.js';
 import { renderAmount } from './amount.js';
 import { renderNamedChemical } from './chemical.js';
 import type { Numbers } from './numbers.js';
+import { renderSolids } from './solids-table.js';
 import { english as strings } from './strings/english.js';
 
 const words = strings.composition;
@@ -39,6 +40,7 @@ export function renderComposition(prediction: Prediction, numbers: Numbers): Tem
         )}
       </tbody>
     </table>
+    ${renderSolids(prediction, numbers)}
   `;
 }
 

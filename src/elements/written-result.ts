@@ -1,5 +1,7 @@
 import { formatEquation, type Prediction } from '../engine.js';
+import { amountText } from './amount.js';
 import { classificationText } from './announcements.js';
+import { doubts } from './assumptions.js';
 import type { StatedConditions } from './card-settings.js';
 import { sorted } from './cautions.js';
 import { chemicalMarkup, escapeMarkup, formulaMarkup } from './chemical.js';
@@ -7,6 +9,7 @@ import { constantText } from './equation.js';
 import type { Numbers } from './numbers.js';
 import type { Outcome } from './outcome.js';
 import { otherAir } from './scale.js';
+import { solidText } from './solids-table.js';
 import { english as strings } from './strings/english.js';
 
 /** Temperature, air and, when they may form, solids in words. */
@@ -29,7 +32,7 @@ function resultText(prediction: Prediction, numbers: Numbers): string {
 
 function soluteText(solute: Prediction['understood'][number], numbers: Numbers): string {
   const { formula, name, molarity } = solute;
-  return `${name ? `${formula} (${name})` : formula} ${strings.molarity(numbers.amount(molarity) ?? molarity.toExponential(2))}`;
+  return `${name ? `${formula} (${name})` : formula} ${strings.molarity(amountText(molarity, numbers))}`;
 }
 
 /** The result as plain sentences, one a line. */
@@ -75,7 +78,7 @@ export function writeMarkup(outcome: Outcome, label: string, numbers: Numbers): 
     heading,
     `<p><strong>${escapeMarkup(resultText(prediction, numbers))}</strong>, ${escapeMarkup(conditionsText(prediction.conditions, numbers))}. ${strings.text.standard}</p>`,
     other ? `<p>${escapeMarkup(other)}</p>` : '',
-    list(prediction.understood.map((solute) => `${formulaMarkup(solute.formula)}${solute.name ? ` (${escapeMarkup(solute.name)})` : ''}: ${escapeMarkup(strings.molarity(numbers.amount(solute.molarity) ?? solute.molarity.toExponential(2)))}`)),
+    list(prediction.understood.map((solute) => `${formulaMarkup(solute.formula)}${solute.name ? ` (${escapeMarkup(solute.name)})` : ''}: ${escapeMarkup(strings.molarity(amountText(solute.molarity, numbers)))}`)),
     ...doubts(prediction).map((text) => `<p><strong>${strings.checkBottle}</strong> ${escapeMarkup(text)}</p>`),
     ...prediction.solids.filter(({ amount }) => amount !== undefined).map((solid) => `<p>${escapeMarkup(solidText(solid, numbers))}</p>`),
     `<p>${escapeMarkup(prediction.reason.text)}</p>`,

@@ -1,5 +1,8 @@
 import data from '../../data/cautions.json';
+import gases from '../../data/gases.json';
 import conventions from '../../data/conventions.json';
+import { kelvin, waterAt } from '../equilibrium/water.js';
+import { exp } from '../quantities/reproducible-math.js';
 import { IONIC_STRENGTH_LIMIT } from '../equilibrium/interaction-coefficients.js';
 import { citationOf } from './constants-used.js';
 import type { Dissolved } from './dissolve.js';
@@ -60,25 +63,39 @@ function extremePH({ solved, uncertainty }: CautionInput): Caution[] {
   });
 }
 
-function toxicGases({ solved, dissolved }: CautionInput): Caution[] {
+function toxicGases({ solved, dissolved, conditions }: CautionInput): Caution[] {
   const codes = new Set(dissolved.particles.flatMap(({ particle }) => particle.cautions));
-  return data.toxicGases.flatMap(({ code, species, gas }) => {
+  return data.toxicGases.flatMap(({ code, species, gas }): Caution[] => {
     const index = solved.model.species.findIndex(({ chemical }) => chemical.id === species);
     const meaning = solved.model.species[index];
     const total = solved.model.system.components[meaning?.parts[0]?.[0] ?? -1]?.total ?? 0;
-    if (!meaning || (!codes.has(code) && total === 0)) return [];
+    if (!meaning || total === 0) return [];
     const molality = solved.state.molality[index]!;
-    const share = molality / total;
-    const free = share > conventions.negligibleShare;
-    return [
-      {
-        code,
-        gravity: free ? 'danger' : 'warning',
-        text: `${free ? `At this pH ${scientific(molality)} mol/kg stands as ${formatChemical(meaning.chemical)}, which can leave the solution as` : 'Acid sets free'} ${gas}. Work in a fume hood${free ? '' : ' and keep acids away'}. ${LOCAL_RULES}`,
-        basis: COMMON_PRACTICE,
-      },
-    ];
+    const pressure = pressureOver(species, molality, conditions.temperature);
+    const stands = `${scientific(molality)} mol/kg stands as ${formatChemical(meaning.chemical)}`;
+    if (pressure !== undefined && pressure >= data.gasPressure.leastPascal) {
+      const share = `${stands}, with about ${pressure.toPrecision(1)} Pa of it above the solution`;
+      return [{ code, gravity: code.startsWith('toxic') ? 'danger' : 'warning', text: `${share}: ${gas} leaves an open vessel, and the pH drifts. Work in a fume hood. ${LOCAL_RULES}`, basis: 'Henry’s law; threshold by common practice, no source' }];
+    }
+    if (pressure === undefined && molality > conventions.negligibleShare * total) {
+      return [{ code, gravity: 'danger', text: `${stands}, which can leave the solution as ${gas}. Work in a fume hood. ${LOCAL_RULES}`, basis: COMMON_PRACTICE }];
+    }
+    if (!codes.has(code)) return [];
+    return [{ code, gravity: 'warning', text: `Acid sets free ${gas}. Keep acids away and work in a fume hood. ${LOCAL_RULES}`, basis: COMMON_PRACTICE }];
   });
+}
+
+const HENRY = new Map((gases.gases as readonly { species: string; henry: number; temperatureDependence?: number; temperature: number }[]).map((gas) => [gas.species, gas]));
+
+/**
+ * Partial pressure, Pa, of a dissolved gas in equilibrium with the air above: Henry's law with the temperature
+ * dependence H(T) = H(θ) exp(B (1/T − 1/θ)) of R. Sander, Atmos. Chem. Phys. 23 (2023) 10901.
+ */
+function pressureOver(species: string, molality: number, celsius: number): number | undefined {
+  const gas = HENRY.get(species);
+  if (!gas) return undefined;
+  const henry = gas.henry * exp((gas.temperatureDependence ?? 0) * (1 / kelvin(celsius) - 1 / kelvin(gas.temperature)));
+  return (molality * waterAt(celsius).density) / henry;
 }
 
 function ionRemarks({ dissolved }: CautionInput): Caution[] {

@@ -134,6 +134,12 @@ function readVolume(volume: string): Decimal {
   return number.value.times(unit.factor).times(1000);
 }
 
+/** The same solutes with other molalities, mol/kg water, in their order. */
+export function withMolalities({ solutes }: Pick<Dissolved, 'solutes'>, molalities: readonly number[]): Pick<Dissolved, 'solutes' | 'particles'> {
+  const changed = solutes.map((solute, index) => ({ ...solute, molality: molalities[index]! }));
+  return { solutes: changed, particles: sumParticles(changed) };
+}
+
 function sumParticles(solutes: readonly DissolvedSolute[]): DissolvedParticle[] {
   const sums = new Map<string, DissolvedParticle>();
   for (const { read, molality } of solutes) {

@@ -32,7 +32,14 @@ export function predict(solutes: string | readonly SoluteInput[], input: Predict
   const dissolved = dissolve(readSolutes(solutes), water, conditions.volume);
   const open = conditions.air === 'equilibrated';
   const solved = solve(dissolved, water, conditions, open);
-  return solvedPrediction({ conditions, water, dissolved, solved, other: () => solve(dissolved, water, conditions, !open) });
+  return solvedPrediction({
+    conditions,
+    water,
+    dissolved,
+    solved,
+    other: () => solve(dissolved, water, conditions, !open),
+    again: (changed) => solve(changed, water, conditions, open).state.pH,
+  });
 }
 
 /** Solves what was dissolved. @throws SoluteError when it does not converge. */

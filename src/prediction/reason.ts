@@ -66,13 +66,13 @@ function airReason(classification: 'acidic' | 'basic'): Reason {
 
 /** A strong acid or base of which most is unspent. */
 function strongReason(accounts: ProtonAccounts, solved: SolvedSolution, { solutes }: Dissolved): Reason | undefined {
-  if (accounts.strong === 0) return undefined;
-  const acid = accounts.strong > 0;
+  if (accounts.unspent === 0) return undefined;
+  const acid = accounts.unspent > 0;
   const chemical = acid ? PROTON : HYDROXIDE;
   const free = solved.state.molality[solved.model.species.findIndex((species) => species.chemical.id === chemical.id)]!;
-  if (free < UNSPENT * Math.abs(accounts.strong)) return undefined;
+  if (free < UNSPENT * Math.abs(accounts.unspent)) return undefined;
   const names = solutes
-    .filter(({ read }) => read.substance.parts.some(({ particle }) => accounts.strongParticles.some((strong) => strong.particle === particle && Math.sign(particle.gives!.protons!) === Math.sign(accounts.strong))))
+    .filter(({ read }) => read.substance.parts.some(({ particle }) => accounts.strongParticles.some((strong) => strong.particle === particle && Math.sign(particle.gives!.protons!) === Math.sign(accounts.unspent))))
     .map(({ read }) => formatChemical({ label: read.substance.formula, charge: 0 }))
     .join(', ');
   return acid
@@ -85,7 +85,7 @@ function bufferPair(accounts: ProtonAccounts, solved: SolvedSolution): Reason | 
   const total = accounts.components.reduce((sum, account) => sum + account.buffering, 0);
   const main = [...accounts.components].sort((a, b) => b.buffering - a.buffering)[0];
   if (!main || main.meaning.kind !== 'family' || main.particles.length === 0 || main.buffering < 0.5 * total) return undefined;
-  if (Number.isInteger(main.initialProtonation) && accounts.strong === 0) return undefined;
+  if (Number.isInteger(main.initialProtonation)) return undefined;
   const states = main.meaning.family.states
     .map((state, index) => ({ state, molality: solved.state.molality[main.meaning.firstSpecies + index]! }))
     .sort((a, b) => b.molality - a.molality);
@@ -108,8 +108,8 @@ export function shownAs(account: ProtonAccount): Chemical {
   }
   if (account.meaning.kind === 'ligand') return chemicalOf(main);
   const { states } = account.meaning.family;
-  if (states.some((state) => state.id === main.id)) return chemicalOf(main);
-  return states[states.length - 1 - Math.round(account.initialProtonation)] ?? chemicalOf(main);
+  const entered = states[states.length - 1 - Math.round(account.initialProtonation)];
+  return entered === undefined ? chemicalOf(main) : { id: entered.id, label: entered.label, charge: entered.charge, name: entered.name };
 }
 
 /** The most abundant spectator of the opposite charge. */

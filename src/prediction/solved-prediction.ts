@@ -11,7 +11,7 @@ import { reasonFor } from './reason.js';
 import { solidStatuses } from './solids.js';
 import type { SolvedSolution } from './solved-solution.js';
 import { dominantChemicals, spectatorsOf, speciesTable } from './species-table.js';
-import { uncertaintyOf } from './uncertainty.js';
+import { uncertaintyOf, type SolveAgain } from './uncertainty.js';
 
 /** What a prediction is read from. */
 export interface PredictionBasis {
@@ -21,18 +21,20 @@ export interface PredictionBasis {
   readonly solved: SolvedSolution;
   /** Solves the same solution under the other condition of air. */
   readonly other: () => SolvedSolution;
+  /** Solves it with other amounts, under the same conditions. */
+  readonly again: SolveAgain;
 }
 
 /**
  * A prediction whose parts are worked out when they are first read: a sweep that wants pH alone does not pay for
  * equations. They are own, enumerable members, so that JSON, structured clones and spreading see them all.
  */
-export function solvedPrediction({ conditions, water, dissolved, solved, other }: PredictionBasis): Prediction {
+export function solvedPrediction({ conditions, water, dissolved, solved, other, again }: PredictionBasis): Prediction {
   const { pH, ionicStrength, lnWaterActivity, residual } = solved.state;
   const neutralPH = water.pKw / 2;
   const { classification } = classify(pH, neutralPH, 0);
   const accounts = once(() => protonAccounts(dissolved.particles, solved));
-  const uncertainty = once(() => uncertaintyOf(solved, dissolved, accounts()));
+  const uncertainty = once(() => uncertaintyOf(solved, dissolved, accounts(), again));
   const otherPH = once(() => other().state.pH);
   const constants = once(() => constantsUsed(solved, water));
   const reason = once(() => reasonFor(classification, accounts(), solved, dissolved));

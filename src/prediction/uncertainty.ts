@@ -2,7 +2,7 @@ import conventions from '../../data/conventions.json';
 import { coefficientUncertainty } from '../equilibrium/interaction-coefficients.js';
 import { sensitivities, type Sensitivities } from '../equilibrium/sensitivity.js';
 import { LN10 } from '../quantities/reproducible-math.js';
-import type { Dissolved, DissolvedSolute } from './dissolve.js';
+import { withMolalities, type Dissolved, type DissolvedSolute } from './dissolve.js';
 import { formatChemical } from './plain-text.js';
 import type { UncertaintyContribution } from './prediction.js';
 import type { ProtonAccounts } from './proton-accounts.js';
@@ -21,6 +21,9 @@ export interface UncertaintyResult {
   readonly weakSpots: readonly WeakSpot[];
 }
 
+/** pH of the same solution with other amounts. */
+export type SolveAgain = (changed: Pick<Dissolved, 'solutes' | 'particles'>) => number;
+
 type Line = Omit<UncertaintyContribution, 'share'>;
 
 /** Lines below this share of the variance are left out of the budget. */
@@ -33,7 +36,7 @@ const DENSITY = { none: 0, ...conventions.densityUncertainty.relativePerMolality
  * eq. 10), with the exact sensitivities of the solved balances: constants, amounts as typed, interaction coefficients,
  * the convention of the pH scale, and the density taken for the solution.
  */
-export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved, accounts: ProtonAccounts): UncertaintyResult {
+export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved, accounts: ProtonAccounts, again: SolveAgain): UncertaintyResult {
   const slopes = sensitivities(solved.model.system, solved.table, solved.state);
   if (!slopes) return { standard: Infinity, budget: [], bufferCapacity: 0, weakSpots: [] };
   const bufferCapacity = -1 / slopes.toProtonTotal;
@@ -42,8 +45,8 @@ export function uncertaintyOf(solved: SolvedSolution, dissolved: Dissolved, acco
     ...solved.model.components.flatMap((meaning) => constantLines(meaning, slopes)),
     ...complexLines(solved, slopes),
     ...solidLines(solved, slopes),
-    ...dissolved.solutes.map((solute) => amountLine(solute, solved, slopes)),
-    ...modelLines(solved, dissolved, slopes),
+    ...dissolved.solutes.map((solute, index) => amountLine(dissolved, index, solved, slopes, again)),
+    ...modelLines(solved, dissolved, slopes, again),
     ...weakSpots.map(({ reason, contribution }): Line => ({ of: `incomplete data: ${reason}`, kind: 'model', contribution, basis: 'model' })),
   ];
   const variance = lines.reduce((sum, line) => sum + line.contribution * line.contribution, 0);
@@ -98,8 +101,25 @@ function solidLines({ model }: SolvedSolution, slopes: Sensitivities): Line[] {
   });
 }
 
-function amountLine(solute: DissolvedSolute, solved: SolvedSolution, slopes: Sensitivities): Line {
-  return { of: `amount of ${solute.read.substance.formula}`, kind: 'amount', contribution: Math.abs(amountSlope(solute, solved, slopes)) * solute.uncertainty, basis: 'digits' };
+function amountLine(dissolved: Dissolved, index: number, solved: SolvedSolution, slopes: Sensitivities, again: SolveAgain): Line {
+  const solute = dissolved.solutes[index]!;
+  const changes = dissolved.solutes.map((_, place) => (place === index ? solute.uncertainty : 0));
+  return { of: `amount of ${solute.read.substance.formula}`, kind: 'amount', contribution: ofAmounts(changes, dissolved, solved, slopes, again), basis: 'digits' };
+}
+
+/** Above this, in pH, the slope at the point no longer tells what the uncertainty of an amount does. */
+const LINEAR_LIMIT = 0.1;
+
+/**
+ * What a change of the molalities together does to pH. Near an end point a slope means nothing over the width of the
+ * uncertainty: there half of the difference between the solutions at both of its ends is taken (as the Guide's
+ * Supplement 1, JCGM 101:2008, would find it).
+ */
+function ofAmounts(changes: readonly number[], dissolved: Dissolved, solved: SolvedSolution, slopes: Sensitivities, again: SolveAgain): number {
+  const linear = Math.abs(dissolved.solutes.reduce((sum, solute, index) => (changes[index] === 0 ? sum : sum + amountSlope(solute, solved, slopes) * changes[index]!), 0));
+  if (linear <= LINEAR_LIMIT) return linear;
+  const [less, more] = [-1, 1].map((sign) => again(withMolalities(dissolved, dissolved.solutes.map(({ molality }, index) => molality + sign * changes[index]!))));
+  return Math.abs(more! - less!) / 2;
 }
 
 /** ∂pH/∂(molality of one solute), kg/mol. */
@@ -125,7 +145,7 @@ function unitsIn(gives: Contribution, meaning: ComponentMeaning): number {
   return (meaning.kind === 'metal' ? gives.metals?.[meaning.metal.key] : gives.ions?.[meaning.particle.id]) ?? 0;
 }
 
-function modelLines({ model, table, state }: SolvedSolution, dissolved: Dissolved, slopes: Sensitivities): Line[] {
+function modelLines({ model, table, state }: SolvedSolution, dissolved: Dissolved, slopes: Sensitivities, again: SolveAgain): Line[] {
   const species = model.species.map(({ chemical }, index) => ({ id: model.system.species[index]!.id, charge: chemical.charge }));
   let pairs = 0;
   const inside = Math.min(1, table.ceiling / Math.max(state.ionicStrength, 1e-300));
@@ -141,13 +161,16 @@ function modelLines({ model, table, state }: SolvedSolution, dissolved: Dissolve
   }
   const total = dissolved.solutes.reduce((sum, { molality }) => sum + molality, 0);
   const scale = SCALE.uncertainty * Math.sqrt(state.ionicStrength / SCALE.ionicStrength);
-  const density = dissolved.solutes.reduce((sum, solute) => {
-    const relative = (DENSITY[solute.volumeBasis ?? 'none'] * total) / Math.sqrt(3);
-    return sum + amountSlope(solute, { model, table, state }, slopes) * solute.molality * relative;
-  }, 0);
+  const density = ofAmounts(
+    dissolved.solutes.map(({ molality, volumeBasis }) => (molality * DENSITY[volumeBasis ?? 'none'] * total) / Math.sqrt(3)),
+    dissolved,
+    { model, table, state },
+    slopes,
+    again,
+  );
   return [
     { of: 'interaction coefficients', kind: 'model', contribution: Math.sqrt(pairs), basis: 'model' },
     { of: 'convention of the pH scale', kind: 'model', contribution: scale, basis: 'model' },
-    { of: 'density of the solution', kind: 'model', contribution: Math.abs(density), basis: 'model' },
+    { of: 'density of the solution', kind: 'model', contribution: density, basis: 'model' },
   ];
 }

@@ -81,7 +81,7 @@ export const english = {
     saturationIndex: 'Saturation index',
     forms: 'Forms',
     formation: { readily: 'readily', slowly: 'slowly', 'only-aged': 'only on ageing' } satisfies Record<SolidStatus['forms'], string>,
-    lies: (amount: string) => `lies as solid: ${amount} mol/kg`,
+    lies: 'lies as solid:',
     liesAs: (formula: string, name: string, amount: string) => `${formula} (${name}) lies as solid: ${amount} mol/kg`,
   },
 
