@@ -10,7 +10,7 @@ const read = (name: string): string => readFileSync(join(root, name), 'utf8');
 
 describe('what is made from something else', () => {
   it('is the reference part of README.md, made from the manifest', () => {
-    const tables = referenceTables(JSON.parse(read('dist/custom-elements.json')) as object);
+    const tables: string = referenceTables(JSON.parse(read('dist/custom-elements.json')) as object);
     assert.equal(read('README.md'), withTables(read('README.md'), tables), 'run npm run build && npm run readme');
   });
 

@@ -19,7 +19,10 @@ export function dataDigest() {
   return createHash('sha256').update(canonicalize(tables)).digest('hex');
 }
 
-/** The release as it is recorded. */
+/**
+ * The release as it is recorded.
+ * @returns {{ engine: string, data: string, digest: string }}
+ */
 export const recordedRelease = () => JSON.parse(readFileSync(new URL('release.json', folder), 'utf8'));
 
 if (process.argv[1] === fileURLToPath(import.meta.url)) {

@@ -16,7 +16,11 @@ const code = (text) => (text ? `\`${cell(text)}\`` : '');
 const table = (head, rows) =>
   rows.length === 0 ? '' : `| ${head.join(' | ')} |\n| ${head.map(() => '---').join(' | ')} |\n${rows.map((row) => `| ${row.join(' | ')} |`).join('\n')}\n`;
 
-/** The tables of every custom element in a manifest, as Markdown. */
+/**
+ * The tables of every custom element in a manifest, as Markdown.
+ * @param {any} manifest
+ * @returns {string}
+ */
 export function referenceTables(manifest) {
   const elements = manifest.modules
     .flatMap((module) => module.declarations ?? [])
@@ -38,7 +42,12 @@ export function referenceTables(manifest) {
     .join('\n');
 }
 
-/** README text with the tables replaced. */
+/**
+ * README text with the tables replaced.
+ * @param {string} readme
+ * @param {string} tables
+ * @returns {string}
+ */
 export function withTables(readme, tables) {
   const start = readme.indexOf(START);
   const end = readme.indexOf(END);

@@ -47,6 +47,11 @@ try {
       await page.goto(`${address}${name}.html`, { waitUntil: 'networkidle' });
       const width = await page.evaluate(() => document.documentElement.scrollWidth);
       if (width > viewport.width) fault(`the page is ${width} px wide in a window of ${viewport.width} px`);
+      // Cards far from the window are not drawn unless they are told to.
+      await page.evaluate(() => {
+        for (const card of document.querySelectorAll('solute-card')) card.style.contentVisibility = 'visible';
+      });
+      await page.waitForTimeout(300);
       const path = join(folder, `${name}-${state}.png`);
       await page.screenshot({ path, fullPage: true });
       console.log(path);
