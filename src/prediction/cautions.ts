@@ -13,7 +13,7 @@ import type { WeakSpot } from './weak-spots.js';
 import { overSolubility, solidStatuses } from './solids.js';
 import type { Particle } from '../substances/ion-library.js';
 import { chemicalOf } from './chemicals.js';
-import type { ComponentMeaning } from './solution-model.js';
+import type { ComponentMeaning } from './meanings.js';
 
 /** What the cautions are read from. */
 export interface CautionInput {

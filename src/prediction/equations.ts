@@ -9,7 +9,8 @@ import type { Chemical, ConstantUsed, Equation, EquationTerm, Reason } from './p
 import type { SolvedSolution } from './solved-solution.js';
 import { chemicalOf, HYDROXIDE, PROTON, WATER } from './chemicals.js';
 import { waterBetween } from './model-builder.js';
-import type { ComponentMeaning, DissolvedParticle, SpeciesMeaning } from './solution-model.js';
+import type { ComponentMeaning, SpeciesMeaning } from './meanings.js';
+import type { DissolvedParticle } from './solution-model.js';
 import { componentTotals } from './species-table.js';
 
 const NEGLIGIBLE = conventions.negligibleShare;

@@ -7,7 +7,7 @@ import type { AcidBaseFamily, MetalIon, Particle } from '../substances/ion-libra
 import { partsOfContribution } from '../substances/part-index.js';
 import type { Solid } from '../substances/solid-library.js';
 import { chemicalOf, HYDROXIDE, PROTON } from './chemicals.js';
-import type { ComplexMeaning, ComponentMeaning, SolidMeaning, SpeciesMeaning } from './solution-model.js';
+import type { ComplexMeaning, ComponentMeaning, SolidMeaning, SpeciesMeaning } from './meanings.js';
 import { acidConstants, complexConstant, hydrolysisConstants, solubilityConstant } from './thermodynamic-constants.js';
 
 /** How a complex finds one of its parts: the component, and the way from the part's own reference state to it. */

@@ -1,4 +1,5 @@
-import type { ComponentMeaning, DissolvedParticle, SolutionModel, SpeciesMeaning } from './solution-model.js';
+import type { ComponentMeaning, SpeciesMeaning } from './meanings.js';
+import type { DissolvedParticle, SolutionModel } from './solution-model.js';
 import type { SolvedSolution } from './solved-solution.js';
 
 /** What one acid–base family or metal did with protons in the solution, compared with how it was put in. */

@@ -5,7 +5,7 @@ import type { EquilibriumState } from '../equilibrium/solver.js';
 import type { Dissolved } from './dissolve.js';
 import type { SolidStatus } from './prediction.js';
 import type { SolvedSolution } from './solved-solution.js';
-import type { SolidMeaning } from './solution-model.js';
+import type { SolidMeaning } from './meanings.js';
 
 /** Saturation index below which a solid is not worth naming. */
 const LOWEST_INDEX = -3;

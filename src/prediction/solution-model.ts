@@ -1,50 +1,18 @@
 import { CARBON_DIOXIDE_FAMILY, lnCarbonDioxideActivity } from '../equilibrium/air.js';
-import type { ChemicalSystem, InteractionTable, SolidDefinition } from '../equilibrium/chemical-system.js';
+import type { ChemicalSystem, InteractionTable } from '../equilibrium/chemical-system.js';
 import { interactionTable } from '../equilibrium/interaction-coefficients.js';
 import type { Water } from '../equilibrium/water.js';
-import { complexesOf, type Complex } from '../substances/complex-library.js';
-import { familyOf, metalOf, particleOf, type AcidBaseFamily, type MetalIon, type Particle } from '../substances/ion-library.js';
-import { solidsOf, type Solid } from '../substances/solid-library.js';
+import { complexesOf } from '../substances/complex-library.js';
+import { familyOf, metalOf, particleOf, type Particle } from '../substances/ion-library.js';
+import { solidsOf } from '../substances/solid-library.js';
+import type { ComplexMeaning, ComponentMeaning, SolidMeaning, SpeciesMeaning } from './meanings.js';
 import { ModelBuilder, type ModelTemplate } from './model-builder.js';
-import type { Chemical } from './prediction.js';
-import type { ConstantHere } from './thermodynamic-constants.js';
 
 /** A particle put into the solution, from one or more solutes. */
 export interface DissolvedParticle {
   readonly particle: Particle;
   /** mol/kg water. */
   readonly molality: number;
-}
-
-/** What a species of the solver is in chemistry. */
-export interface SpeciesMeaning {
-  readonly chemical: Chemical;
-  /** Components it is made of, with their number; none for H⁺, OH⁻ and spectators. The metal of a complex comes first. */
-  readonly parts: readonly (readonly [component: number, units: number])[];
-  /** Protons relative to the fully deprotonated family and the bare metal ion, per species. */
-  readonly protons: number;
-}
-
-/** A component and where its constants come from. */
-export type ComponentMeaning =
-  | { readonly kind: 'family'; readonly family: AcidBaseFamily; readonly constants: readonly ConstantHere[]; readonly firstSpecies: number }
-  | { readonly kind: 'metal'; readonly metal: MetalIon; readonly constants: readonly ConstantHere[]; readonly firstSpecies: number }
-  /** An ion that exchanges no proton but binds a metal. */
-  | { readonly kind: 'ligand'; readonly particle: Particle; readonly constants: readonly ConstantHere[]; readonly firstSpecies: number };
-
-/** A complex among the species. */
-export interface ComplexMeaning {
-  readonly complex: Complex;
-  readonly constant: ConstantHere;
-  /** Index of its species. */
-  readonly species: number;
-}
-
-/** A solid that the composition can form, as the solver sees it. */
-export interface SolidMeaning {
-  readonly solid: Solid;
-  readonly constant: ConstantHere;
-  readonly definition: SolidDefinition;
 }
 
 /** The solution as the solver sees it, with the way back to chemistry. */

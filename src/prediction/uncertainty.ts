@@ -9,7 +9,7 @@ import type { ProtonAccounts } from './proton-accounts.js';
 import { weakSpotsOf, type WeakSpot } from './weak-spots.js';
 import type { SolvedSolution } from './solved-solution.js';
 import type { Contribution } from '../substances/ion-library.js';
-import type { ComponentMeaning } from './solution-model.js';
+import type { ComponentMeaning } from './meanings.js';
 
 export interface UncertaintyResult {
   /** Standard uncertainty of pH. */

@@ -2,7 +2,7 @@ import data from '../../data/weak-spots.json';
 import { LN10 } from '../quantities/reproducible-math.js';
 import type { ProtonAccounts } from './proton-accounts.js';
 import type { SolvedSolution } from './solved-solution.js';
-import type { ComponentMeaning } from './solution-model.js';
+import type { ComponentMeaning } from './meanings.js';
 
 /** A composition for which the published constants are known to be incomplete. */
 export interface WeakSpot {
