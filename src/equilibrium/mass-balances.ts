@@ -3,7 +3,7 @@ import type { ChemicalSystem, SolidDefinition } from './chemical-system.js';
 import { ChangeOfBasis } from './change-of-basis.js';
 import { solveScaled } from './linear-algebra.js';
 import { SaturationConstraint } from './saturation.js';
-import { sharedStructure } from './shared-structure.js';
+import { sharedStructure, type Workspace } from './shared-structure.js';
 import { boundMixedSpecies, meanProtonation, startingPoint, type BalanceArrays } from './starting-point.js';
 
 /** Largest Newton step in a natural logarithm. */
@@ -14,7 +14,8 @@ const STEP_TOLERANCE = 1e-16;
 const NO_COLUMNS = new Int32Array(0);
 
 /**
- * All balances at fixed activity coefficients, as one convex problem.
+ * All balances at fixed activity coefficients, as one convex problem. The arrays belong to the structure of the system: one
+ * instance is to be done with before the next of the same structure is made.
  *
  * With ξ = (ln a of every component, ln a(H⁺)) and mj = exp(cj + nj·ξ), the balances Σ nj mj = t are the condition
  * ∇F = 0 of F(ξ) = Σ mj − t·ξ. F is convex (its Hessian is Σ mj nj njᵀ), strictly so because H⁺ and every bare
@@ -39,10 +40,7 @@ export class MassBalances {
   readonly #constants: Float64Array;
   readonly #totals: Float64Array;
   #activeTotals: Float64Array;
-  /** The active numbers without zeros: where each species starts, the unknown and the number of every entry. */
-  readonly #rows: Int32Array;
-  readonly #columns: Int32Array;
-  readonly #entries: Float64Array;
+  readonly #work: Workspace;
   readonly #unknowns: Float64Array;
   readonly #shift: Float64Array;
   readonly #exponents: Float64Array;
@@ -52,13 +50,6 @@ export class MassBalances {
   readonly #basis = new ChangeOfBasis();
   /** Molality of the species that take part in no reaction, 0 for all others. */
   readonly #fixed: Float64Array;
-  readonly #gradient: Float64Array;
-  readonly #magnitude: Float64Array;
-  readonly #hessian: Float64Array;
-  readonly #step: Float64Array;
-  readonly #trial: Float64Array;
-  readonly #offset: Float64Array;
-  readonly #scale: Float64Array;
 
   constructor(system: ChemicalSystem) {
     this.#system = system;
@@ -67,36 +58,40 @@ export class MassBalances {
     const size = shared.free.length + 1;
     this.#free = shared.free;
     this.#size = size;
-    this.#numbers = shared.numbers.slice();
+    const work = shared.workspace;
+    this.#work = work;
+    this.#numbers = work.numbers;
+    this.#numbers.set(shared.numbers);
     this.#active = this.#numbers;
     this.#protons = shared.protons;
     this.#constants = shared.constants;
-    this.#fixed = new Float64Array(count);
+    this.#fixed = work.fixed;
     for (const index of shared.fixed) this.#fixed[index] = system.species[index]!.fixedMolality!;
-    this.#totals = new Float64Array(size);
+    this.#totals = work.totals;
     this.#activeTotals = this.#totals;
-    this.#lnTotals = new Float64Array(size);
+    this.#lnTotals = work.lnTotals;
     for (let i = 0; i < size - 1; i++) {
       const { total } = system.components[shared.free[i]!]!;
       this.#totals[i] = total;
       this.#lnTotals[i] = log(total);
     }
-    this.#rows = new Int32Array(count + 1);
-    this.#columns = new Int32Array(count * size);
-    this.#entries = new Float64Array(count * size);
-    this.#unknowns = new Float64Array(size);
-    this.#shift = new Float64Array(size);
-    this.#exponents = new Float64Array(count);
+    this.#unknowns = work.unknowns;
+    this.#shift = work.shift;
+    this.#exponents = work.exponents;
     this.molality = new Float64Array(count);
-    this.#gradient = new Float64Array(size);
-    this.#magnitude = new Float64Array(size);
-    this.#hessian = new Float64Array(size * size);
-    this.#step = new Float64Array(size);
-    this.#trial = new Float64Array(size);
-    this.#offset = new Float64Array(size);
-    this.#scale = new Float64Array(size);
     const { protons, only } = shared;
-    this.#arrays = { size, numbers: this.#numbers, protons, exponents: this.#exponents, only, lnTotals: this.#lnTotals, fixed: this.#fixed, molality: this.molality, unknowns: this.#unknowns };
+    this.#arrays = {
+      size,
+      protons,
+      only,
+      numbers: work.numbers,
+      exponents: work.exponents,
+      lnTotals: work.lnTotals,
+      fixed: work.fixed,
+      unknowns: work.unknowns,
+      molality: this.molality,
+      scratch: [work.gradient, work.magnitude, work.step],
+    };
   }
 
   get lnProtonActivity(): number {
@@ -149,32 +144,32 @@ export class MassBalances {
     const size = this.#size;
     const enough = Math.max(tolerance, GRADIENT_TOLERANCE);
     for (let j = 0; j < this.molality.length; j++) {
-      const end = this.#rows[j + 1]!;
-      for (let entry = this.#rows[j]!; entry < end; entry++) this.#exponents[j] = this.#exponents[j]! + this.#entries[entry]! * this.#unknowns[this.#columns[entry]!]!;
+      const end = this.#work.rows[j + 1]!;
+      for (let entry = this.#work.rows[j]!; entry < end; entry++) this.#exponents[j] = this.#exponents[j]! + this.#work.entries[entry]! * this.#unknowns[this.#work.columns[entry]!]!;
     }
-    const offset = this.#offset.fill(0);
+    const offset = this.#work.offset.fill(0);
     this.#evaluate(offset);
     for (let iteration = 0; iteration < MOST_STEPS; iteration++) {
       if (this.#largestGradient() < enough) break;
       this.#setHessian();
-      for (let i = 0; i < size; i++) this.#step[i] = -this.#gradient[i]!;
-      solveScaled(this.#hessian, this.#step, size, this.#scale);
+      for (let i = 0; i < size; i++) this.#work.step[i] = -this.#work.gradient[i]!;
+      solveScaled(this.#work.hessian, this.#work.step, size, this.#work.scale);
       let longest = 0;
       let slope = 0;
       for (let i = 0; i < size; i++) {
-        longest = Math.max(longest, Math.abs(this.#step[i]!));
-        slope += this.#step[i]! * this.#gradient[i]!;
+        longest = Math.max(longest, Math.abs(this.#work.step[i]!));
+        slope += this.#work.step[i]! * this.#work.gradient[i]!;
       }
       let length = longest > LARGEST_STEP ? LARGEST_STEP / longest : 1;
       for (let halving = 0; halving < 60; halving++) {
-        for (let i = 0; i < size; i++) this.#trial[i] = offset[i]! + length * this.#step[i]!;
-        this.#evaluate(this.#trial);
+        for (let i = 0; i < size; i++) this.#work.trial[i] = offset[i]! + length * this.#work.step[i]!;
+        this.#evaluate(this.#work.trial);
         let slopeThere = 0;
-        for (let i = 0; i < size; i++) slopeThere += this.#step[i]! * this.#gradient[i]!;
+        for (let i = 0; i < size; i++) slopeThere += this.#work.step[i]! * this.#work.gradient[i]!;
         if (slopeThere <= 0.5 * Math.abs(slope) || longest * length < STEP_TOLERANCE) break;
         length /= 2;
       }
-      offset.set(this.#trial);
+      offset.set(this.#work.trial);
       if (longest < STEP_TOLERANCE) break;
     }
     for (let i = 0; i < size; i++) this.#unknowns[i] = this.#unknowns[i]! + offset[i]!;
@@ -330,23 +325,24 @@ export class MassBalances {
     const size = this.#size;
     let entry = 0;
     for (let j = 0; j < this.molality.length; j++) {
-      this.#rows[j] = entry;
+      this.#work.rows[j] = entry;
       if (this.#fixed[j]! > 0) continue;
       for (let i = 0; i < size; i++) {
         const number = this.#active[j * size + i]!;
         if (number === 0) continue;
-        this.#columns[entry] = i;
-        this.#entries[entry++] = number;
+        this.#work.columns[entry] = i;
+        this.#work.entries[entry++] = number;
       }
     }
-    this.#rows[this.molality.length] = entry;
+    this.#work.rows[this.molality.length] = entry;
   }
 
   /** Molalities, gradient and sum of the terms' sizes at a point. */
   #evaluate(point: Float64Array): void {
     const size = this.#size;
     const count = this.molality.length;
-    const [molality, rows, columns, entries, exponents, gradient, magnitude, fixed] = [this.molality, this.#rows, this.#columns, this.#entries, this.#exponents, this.#gradient, this.#magnitude, this.#fixed];
+    const { rows, columns, entries, gradient, magnitude } = this.#work;
+    const [molality, exponents, fixed] = [this.molality, this.#exponents, this.#fixed];
     for (let i = 0; i < size; i++) {
       gradient[i] = -this.#activeTotals[i]!;
       magnitude[i] = Math.abs(this.#activeTotals[i]!);
@@ -369,13 +365,14 @@ export class MassBalances {
 
   #largestGradient(): number {
     let largest = 0;
-    for (let i = 0; i < this.#size; i++) if (this.#magnitude[i]! > 0) largest = Math.max(largest, Math.abs(this.#gradient[i]!) / this.#magnitude[i]!);
+    for (let i = 0; i < this.#size; i++) if (this.#work.magnitude[i]! > 0) largest = Math.max(largest, Math.abs(this.#work.gradient[i]!) / this.#work.magnitude[i]!);
     return largest;
   }
 
   #setHessian(): void {
     const size = this.#size;
-    const [molality, rows, columns, entries, hessian] = [this.molality, this.#rows, this.#columns, this.#entries, this.#hessian];
+    const { rows, columns, entries, hessian } = this.#work;
+    const { molality } = this;
     hessian.fill(0);
     for (let j = 0; j < molality.length; j++) {
       const end = rows[j + 1]!;

@@ -11,6 +11,53 @@ export interface SharedStructure {
   readonly only: Int32Array;
   /** Species of fixed molality. */
   readonly fixed: readonly number[];
+  readonly workspace: Workspace;
+}
+
+/** Arrays that a solution fills anew; solutions of one structure are solved one after the other and use the same. */
+export interface Workspace {
+  readonly numbers: Float64Array;
+  readonly fixed: Float64Array;
+  readonly totals: Float64Array;
+  readonly lnTotals: Float64Array;
+  /** The active numbers without zeros: where each species starts, the unknown and the number of every entry. */
+  readonly rows: Int32Array;
+  readonly columns: Int32Array;
+  readonly entries: Float64Array;
+  readonly unknowns: Float64Array;
+  readonly shift: Float64Array;
+  readonly exponents: Float64Array;
+  readonly gradient: Float64Array;
+  readonly magnitude: Float64Array;
+  readonly hessian: Float64Array;
+  readonly step: Float64Array;
+  readonly trial: Float64Array;
+  readonly offset: Float64Array;
+  readonly scale: Float64Array;
+}
+
+function workspaceOf(count: number, size: number): Workspace {
+  const ofSpecies = (): Float64Array => new Float64Array(count);
+  const ofUnknowns = (): Float64Array => new Float64Array(size);
+  return {
+    numbers: new Float64Array(count * size),
+    fixed: ofSpecies(),
+    totals: ofUnknowns(),
+    lnTotals: ofUnknowns(),
+    rows: new Int32Array(count + 1),
+    columns: new Int32Array(count * size),
+    entries: new Float64Array(count * size),
+    unknowns: ofUnknowns(),
+    shift: ofUnknowns(),
+    exponents: ofSpecies(),
+    gradient: ofUnknowns(),
+    magnitude: ofUnknowns(),
+    hessian: new Float64Array(size * size),
+    step: ofUnknowns(),
+    trial: ofUnknowns(),
+    offset: ofUnknowns(),
+    scale: ofUnknowns(),
+  };
 }
 
 const SHARED = new WeakMap<object, SharedStructure>();
@@ -51,7 +98,7 @@ export function sharedStructure(system: ChemicalSystem): SharedStructure {
     constants[j] = constant;
     protons[j] = species.protons;
   }
-  const shared = { free, numbers, protons, constants, only, fixed };
+  const shared = { free, numbers, protons, constants, only, fixed, workspace: workspaceOf(count, size) };
   if (system.structure) SHARED.set(system.structure, shared);
   return shared;
 }

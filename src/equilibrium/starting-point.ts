@@ -23,6 +23,8 @@ export interface BalanceArrays {
   readonly molality: Float64Array;
   /** Written: ln of the activities of the components. */
   readonly unknowns: Float64Array;
+  /** Three arrays of the size of the unknowns, free to use. */
+  readonly scratch: readonly [Float64Array, Float64Array, Float64Array];
 }
 
 /** Steps of the bisection that finds the starting pH, between the limits below. */
@@ -90,11 +92,13 @@ export function boundMixedSpecies({ size, numbers, exponents, only, lnTotals, un
  * Proton balance at one pH with every component by itself; leaves molalities and unknowns. Mononuclear species share a
  * component in closed form; a polynuclear one then bounds the activity so that it alone does not exceed the total.
  */
-function simpleProtonBalance({ size, numbers, protons, exponents, only, lnTotals, fixed, molality, unknowns }: BalanceArrays, y: number): number {
+function simpleProtonBalance({ size, numbers, protons, exponents, only, lnTotals, fixed, molality, unknowns, scratch }: BalanceArrays, y: number): number {
   const last = size - 1;
   const count = molality.length;
-  const largest = new Float64Array(size).fill(-Infinity);
-  const bound = new Float64Array(size).fill(Infinity);
+  const [largest, bound, sums] = scratch;
+  largest.fill(-Infinity);
+  bound.fill(Infinity);
+  sums.fill(0);
   for (let j = 0; j < count; j++) {
     const i = only[j]!;
     if (i < 0) continue;
@@ -103,7 +107,6 @@ function simpleProtonBalance({ size, numbers, protons, exponents, only, lnTotals
     if (number === 1) largest[i] = Math.max(largest[i]!, exponent);
     else bound[i] = Math.min(bound[i]!, (lnTotals[i]! - log(number) - exponent) / number);
   }
-  const sums = new Float64Array(size);
   for (let j = 0; j < count; j++) {
     const i = only[j]!;
     if (i >= 0 && numbers[j * size + i] === 1) sums[i] = sums[i]! + exp(exponents[j]! + protons[j]! * y - largest[i]!);
