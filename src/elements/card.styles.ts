@@ -123,6 +123,7 @@ const frameStyles = css`
   td {
     unicode-bidi: plaintext;
   }
+  .label,
   .sentence,
   .solute-name {
     text-align: -webkit-match-parent;

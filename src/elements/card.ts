@@ -30,7 +30,7 @@ export type CardState = 'empty' | 'predicting' | 'predicted' | 'problem';
  * @tag solute-card
  * @slot - Shown only while the element is not defined; with `keep-text` it holds the result as text.
  *
- * @attr {string} solutes - What is dissolved: amounts and substances, pieces apart by semicolons or line breaks; JSON is accepted.
+ * @attr {string} solutes - What is dissolved: amounts and substances, separated by semicolons or line breaks; JSON is accepted.
  * @attr {string} label - Heading of the card.
  * @attr {string} volume - Final volume, when amounts are masses or aliquots: `500 mL`.
  * @attr {string} temperature - Celsius, or a quantity with unit; from `<solute-conditions>` when absent, else 25.

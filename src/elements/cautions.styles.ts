@@ -28,6 +28,7 @@ export const cautionStyles = css`
     flex-basis: 100%;
     align-items: flex-start;
     gap: var(--_space);
+    margin-block-start: calc(0.5 * var(--_space));
     --_gravity: var(--_warning);
   }
   .doubt .icon {

@@ -25,7 +25,6 @@ export function renderSolids(prediction: Prediction, numbers: Numbers): Template
         <tr>
           <th scope="col">${words.solid}</th>
           <th scope="col" class="number">${words.saturationIndex}</th>
-          <th scope="col">${words.forms}</th>
         </tr>
       </thead>
       <tbody>
@@ -33,7 +32,7 @@ export function renderSolids(prediction: Prediction, numbers: Numbers): Template
           ({ formula, name, saturationIndex, uncertainty, forms, amount }) => html`<tr>
             <th scope="row">
               ${renderFormula(formula)}
-              <span class="sentence origin">${name}</span>
+              <span class="sentence origin">${name}, ${words.forms[forms]}</span>
               ${amount === undefined ? nothing : html`<span class="sentence">${words.lies} <strong>${renderAmount(amount, numbers)} mol/kg</strong></span>`}
             </th>
             <td class="number">
@@ -41,7 +40,6 @@ export function renderSolids(prediction: Prediction, numbers: Numbers): Template
                 ? html`${numbers.signed(saturationIndex, decimalsOf(uncertainty))}<span class="origin">± ${numbers.fixed(uncertainty, decimalsOf(uncertainty))}</span>`
                 : numbers.fixed(0, 0)}
             </td>
-            <td>${words.formation[forms]}</td>
           </tr>`,
         )}
       </tbody>

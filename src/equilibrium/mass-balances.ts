@@ -141,38 +141,39 @@ export class MassBalances {
    * unknowns of a size whose last bit is larger than the free ligand that the balances leave.
    */
   #descend(tolerance: number): void {
+    const { rows, columns, entries, gradient, hessian, step, trial, offset, scale, exponents, unknowns } = this.#work;
     const size = this.#size;
     const enough = Math.max(tolerance, GRADIENT_TOLERANCE);
-    for (let j = 0; j < this.molality.length; j++) {
-      const end = this.#work.rows[j + 1]!;
-      for (let entry = this.#work.rows[j]!; entry < end; entry++) this.#exponents[j] = this.#exponents[j]! + this.#work.entries[entry]! * this.#unknowns[this.#work.columns[entry]!]!;
+    for (let j = 0; j < exponents.length; j++) {
+      const end = rows[j + 1]!;
+      for (let entry = rows[j]!; entry < end; entry++) exponents[j] = exponents[j]! + entries[entry]! * unknowns[columns[entry]!]!;
     }
-    const offset = this.#work.offset.fill(0);
+    offset.fill(0);
     this.#evaluate(offset);
     for (let iteration = 0; iteration < MOST_STEPS; iteration++) {
       if (this.#largestGradient() < enough) break;
       this.#setHessian();
-      for (let i = 0; i < size; i++) this.#work.step[i] = -this.#work.gradient[i]!;
-      solveScaled(this.#work.hessian, this.#work.step, size, this.#work.scale);
+      for (let i = 0; i < size; i++) step[i] = -gradient[i]!;
+      solveScaled(hessian, step, size, scale);
       let longest = 0;
       let slope = 0;
       for (let i = 0; i < size; i++) {
-        longest = Math.max(longest, Math.abs(this.#work.step[i]!));
-        slope += this.#work.step[i]! * this.#work.gradient[i]!;
+        longest = Math.max(longest, Math.abs(step[i]!));
+        slope += step[i]! * gradient[i]!;
       }
       let length = longest > LARGEST_STEP ? LARGEST_STEP / longest : 1;
       for (let halving = 0; halving < 60; halving++) {
-        for (let i = 0; i < size; i++) this.#work.trial[i] = offset[i]! + length * this.#work.step[i]!;
-        this.#evaluate(this.#work.trial);
+        for (let i = 0; i < size; i++) trial[i] = offset[i]! + length * step[i]!;
+        this.#evaluate(trial);
         let slopeThere = 0;
-        for (let i = 0; i < size; i++) slopeThere += this.#work.step[i]! * this.#work.gradient[i]!;
+        for (let i = 0; i < size; i++) slopeThere += step[i]! * gradient[i]!;
         if (slopeThere <= 0.5 * Math.abs(slope) || longest * length < STEP_TOLERANCE) break;
         length /= 2;
       }
-      offset.set(this.#work.trial);
+      offset.set(trial);
       if (longest < STEP_TOLERANCE) break;
     }
-    for (let i = 0; i < size; i++) this.#unknowns[i] = this.#unknowns[i]! + offset[i]!;
+    for (let i = 0; i < size; i++) unknowns[i] = unknowns[i]! + offset[i]!;
   }
 
   /** See {@link ChangeOfBasis}; the proton numbers are counted from the components again. */
@@ -323,18 +324,19 @@ export class MassBalances {
   /** Lists the numbers that are not zero, species by species: most species hold two or three of the unknowns. */
   #compress(): void {
     const size = this.#size;
+    const { rows, columns, entries } = this.#work;
     let entry = 0;
     for (let j = 0; j < this.molality.length; j++) {
-      this.#work.rows[j] = entry;
+      rows[j] = entry;
       if (this.#fixed[j]! > 0) continue;
       for (let i = 0; i < size; i++) {
         const number = this.#active[j * size + i]!;
         if (number === 0) continue;
-        this.#work.columns[entry] = i;
-        this.#work.entries[entry++] = number;
+        columns[entry] = i;
+        entries[entry++] = number;
       }
     }
-    this.#work.rows[this.molality.length] = entry;
+    rows[this.molality.length] = entry;
   }
 
   /** Molalities, gradient and sum of the terms' sizes at a point. */
@@ -365,7 +367,8 @@ export class MassBalances {
 
   #largestGradient(): number {
     let largest = 0;
-    for (let i = 0; i < this.#size; i++) if (this.#work.magnitude[i]! > 0) largest = Math.max(largest, Math.abs(this.#work.gradient[i]!) / this.#work.magnitude[i]!);
+    const { gradient, magnitude } = this.#work;
+    for (let i = 0; i < magnitude.length; i++) if (magnitude[i]! > 0) largest = Math.max(largest, Math.abs(gradient[i]!) / magnitude[i]!);
     return largest;
   }
 

@@ -117,7 +117,7 @@ function complexes({ solved, dissolved }: CautionInput): Caution[] {
     if (meaning.kind !== 'metal' || data.complexes.hardCations.includes(meaning.metal.ion)) return [];
     const metal = { label: meaning.metal.formula, charge: meaning.metal.charge };
     return dissolved.particles
-      .filter(({ particle }) => mayBind(particle) && !bound.has(`${meaning.metal.key} ${Object.keys(particle.gives?.families ?? {})[0] ?? particle.id}`))
+      .filter(({ particle }) => mayBind(particle, meaning.metal.ion) && !bound.has(`${meaning.metal.key} ${Object.keys(particle.gives?.families ?? {})[0] ?? particle.id}`))
       .map(({ particle }) => `${formatChemical(metal)} with ${formatChemical(chemicalOf(particle))}`);
   });
   if (missing.length === 0) return [];
@@ -131,7 +131,8 @@ function complexes({ solved, dissolved }: CautionInput): Caution[] {
   ];
 }
 
-function mayBind(particle: Particle): boolean {
+function mayBind(particle: Particle, cation: string): boolean {
+  if (data.complexes.halides.includes(particle.id)) return data.complexes.cationsThatBindHalides.includes(cation);
   const proton = particle.id === 'OH-' || particle.id === 'H+' || particle.id === 'O-2';
   return particle.charge <= 0 && !proton && !particle.gives?.metals && !data.complexes.weakLigands.includes(particle.id);
 }

@@ -79,8 +79,7 @@ export const english = {
     caption: 'Solids this solution can form. Above 0 it holds more than the solid leaves dissolved.',
     solid: 'Solid',
     saturationIndex: 'Saturation index',
-    forms: 'Forms',
-    formation: { readily: 'readily', slowly: 'slowly', 'only-aged': 'only on ageing' } satisfies Record<SolidStatus['forms'], string>,
+    forms: { readily: 'forms readily', slowly: 'forms slowly', 'only-aged': 'forms only on ageing' } satisfies Record<SolidStatus['forms'], string>,
     lies: 'lies as solid:',
     liesAs: (formula: string, name: string, amount: string) => `${formula} (${name}) lies as solid: ${amount} mol/kg`,
   },
@@ -116,7 +115,7 @@ export const english = {
 
   empty: {
     title: 'Nothing to predict yet',
-    instruction: 'State what is dissolved: an amount and a substance, pieces apart by a semicolon.',
+    instruction: 'State what is dissolved: an amount and a substance. Separate several with semicolons.',
     example: (example: string) => `For example: ${example}`,
     exampleSolutes: '20 mmol/L NaHCO3; 5 g/L MgSO4·7H2O',
   },
