@@ -7,7 +7,7 @@ import { showSamples } from './sample-table.js';
 const TYPING_PAUSE = 200;
 
 const form = document.querySelector('#intake');
-const { sample, solutes, volume, temperature, air } = form.elements;
+const { sample, solutes, volume, temperature, air, solids } = form.elements;
 const card = document.querySelector('solute-card');
 const status = document.querySelector('#status');
 const sampleError = document.querySelector('#sample-error');
@@ -24,6 +24,7 @@ function tellCard() {
   card.volume = volume.value.trim();
   card.temperature = temperature.value.trim();
   card.air = air.value;
+  card.solids = solids.value;
 }
 
 function showSampleError(wrong) {
@@ -73,7 +74,6 @@ async function store(record) {
     added = await addSample({
       sample: number,
       solutes: record.solutes,
-      volume: volume.value.trim(),
       storedAt: new Date().toISOString(),
       record,
     });
@@ -93,25 +93,18 @@ function open(entry) {
   opened = entry;
   sample.value = entry.sample;
   solutes.value = entry.solutes;
-  volume.value = entry.volume;
-  temperature.value = entry.record.conditions.temperature;
-  air.value = entry.record.conditions.air;
+  const { conditions } = entry.record;
+  volume.value = conditions.volume ?? '';
+  temperature.value = conditions.temperature;
+  air.value = conditions.air;
+  solids.value = conditions.solids;
   showSampleError(false);
-  card.label = entry.sample;
-  card.volume = entry.volume;
   say(status, `${referenceOf(entry.number)} opened.`);
   card.restore(entry.record);
   refresh();
   sample.focus();
   form.scrollIntoView({ block: 'nearest' });
 }
-
-// The card computes a stored sample afresh; a newer engine may see it differently, which must not go unsaid.
-card.addEventListener('solute-prediction', ({ detail: { record, source } }) => {
-  if (source !== 'restore' || !opened) return;
-  const [before, now] = [pHText(opened.record), pHText(record)];
-  if (before !== now) say(status, `${referenceOf(opened.number)} opened. Stored as pH ${before}, computed now as pH ${now}.`, 'alarm');
-});
 
 async function remove(entry) {
   confirmation.querySelector('#confirm-text').textContent = `${referenceOf(entry.number)}, sample ${entry.sample}, pH ${pHText(entry.record)}. This cannot be undone.`;

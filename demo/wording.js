@@ -13,9 +13,9 @@ export function classText({ classification, decided }) {
 }
 
 /** "500 mL, 20 °C, open to air": what was set besides the solutes. */
-export function conditionsText({ volume, record }) {
-  const { temperature, air } = record.conditions;
-  return [volume, `${temperature} °C`, air === 'equilibrated' ? 'open to air' : 'air kept out'].filter(Boolean).join(', ');
+export function conditionsText({ record }) {
+  const { volume, temperature, air, solids } = record.conditions;
+  return [volume, `${temperature} °C`, air === 'equilibrated' ? 'open to air' : 'air kept out', solids === 'equilibrated' && 'solids let form'].filter(Boolean).join(', ');
 }
 
 const moments = new Intl.DateTimeFormat('en-GB', { dateStyle: 'medium', timeStyle: 'short' });

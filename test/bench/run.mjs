@@ -1,6 +1,7 @@
 /**
- * Measures the built package: predictions a second in Node, and a page of many cards in Chromium. Nothing is built and
- * nothing is asserted, since times depend on the machine; ratios to a fixed loop of the same run can be compared.
+ * Measures the built package: predictions a second in Node beside the same equations in a general-purpose solver, and a
+ * page of many cards in Chromium. Nothing is built and nothing is asserted, since times depend on the machine; ratios
+ * within one run can be compared.
  *
  *   npm run build && npm run bench
  */
@@ -10,6 +11,7 @@ import { fileURLToPath, pathToFileURL } from 'node:url';
 import { chromium } from 'playwright-core';
 import { findChromium } from '../tools/ensure-browser.mjs';
 import { measureCards } from './cards.mjs';
+import { generalSolver } from './general-solver.mjs';
 
 const dist = join(dirname(fileURLToPath(import.meta.url)), '..', '..', 'dist');
 const engineFile = join(dist, 'engine.min.js');
@@ -20,11 +22,11 @@ const ROUNDS = 5;
 const SECONDS = 1.5;
 const CARDS = 1000;
 
+/** Amounts differ from call to call, so that no answer is one already known. */
 const SUBJECTS = {
-  'one salt': (k) => `${(0.01 + (k % 97) / 1000).toFixed(4)} mol/kg NH4Cl`,
-  'a buffer of two salts': (k) => `${(0.01 + (k % 97) / 1000).toFixed(4)} mol/kg Na2HPO4; 0.02 mol/kg KH2PO4`,
+  'one salt': (k) => `${(0.01 + (k % 997) / 10000).toFixed(4)} mol/kg NH4Cl`,
   'six solutes with metals': (k) =>
-    `${(0.001 + (k % 97) / 1e5).toFixed(5)} mol/kg FeCl3; 2 mmol/kg CuSO4·5H2O; 3 mmol/kg ZnCl2; 0.01 mol/kg CH3COONa; 0.02 mol/kg NH4NO3; 5 mmol/kg MgCl2·6H2O`,
+    `${(0.001 + (k % 997) / 1e6).toFixed(6)} mol/kg FeCl3; 2 mmol/kg CuSO4·5H2O; 3 mmol/kg ZnCl2; 0.01 mol/kg CH3COONa; 0.02 mol/kg NH4NO3; 5 mmol/kg MgCl2·6H2O`,
 };
 
 /** Milliseconds of wall clock and of processor time that a piece of work takes. */
@@ -51,33 +53,46 @@ function printTable(rows) {
   for (const row of rows) console.log(row.map((cell, column) => (column === 0 ? String(cell).padEnd(widths[0]) : String(cell).padStart(widths[column]))).join('  '));
 }
 
+/** Milliseconds of processor time that one call takes: the median of several rounds, after one that warms up. */
+function timeOfOne(call) {
+  let calls = 0;
+  const perform = (seconds) => {
+    const end = performance.now() + seconds * 1000;
+    let done = 0;
+    do {
+      call(calls++);
+      done++;
+    } while (performance.now() < end);
+    return done;
+  };
+  perform(SECONDS);
+  return median(Array.from({ length: ROUNDS }, () => {
+    let done = 0;
+    const { cpu } = timed(() => (done = perform(SECONDS / ROUNDS)));
+    return cpu / done;
+  }));
+}
+
 async function measureEngine() {
-  const { predict } = await import(pathToFileURL(engineFile).href);
+  const { predict, createRecord } = await import(pathToFileURL(engineFile).href);
+  const solver = await generalSolver(dist);
   for (let k = 0; k < 20; k++) squareRoots();
   const yardstick = median(Array.from({ length: ROUNDS * 3 }, () => timed(squareRoots).cpu));
-  const rows = [['predictions in Node', 'per second', 'per CPU second', '1e6 square roots each']];
+  const rows = [['in Node', 'per CPU second', '1e6 square roots each', 'of predict + pH']];
   for (const [name, solutes] of Object.entries(SUBJECTS)) {
-    let count = 0;
-    const perform = (seconds) => {
-      const end = performance.now() + seconds * 1000;
-      let done = 0;
-      while (performance.now() < end) {
-        predict(solutes(count++));
-        done++;
-      }
-      return done;
-    };
-    perform(SECONDS);
-    const rounds = Array.from({ length: ROUNDS }, () => {
-      let done = 0;
-      const { wall, cpu } = timed(() => (done = perform(SECONDS / ROUNDS)));
-      return { perSecond: (done / wall) * 1000, perCpuSecond: (done / cpu) * 1000, each: cpu / done };
-    });
-    const each = median(rounds.map((round) => round.each));
-    rows.push([name, Math.round(median(rounds.map((round) => round.perSecond))), Math.round(median(rounds.map((round) => round.perCpuSecond))), (each / yardstick).toFixed(3)]);
+    const pH = timeOfOne((k) => predict(solutes(k)).pH);
+    const whole = timeOfOne((k) => createRecord(predict(solutes(k))));
+    const row = (label, time) => rows.push([`${name}: ${label}`, Math.round(1000 / time), (time / yardstick).toFixed(3), (time / pH).toFixed(1)]);
+    row('predict + pH', pH);
+    row('predict + whole record', whole);
+    if (!solver) continue;
+    const problems = Array.from({ length: 32 }, (_, k) => solver.problem(solutes(31 * k)));
+    const missed = problems.filter((problem) => !(Math.abs(solver.solve(problem).pH - problem.pH) < 1e-6)).length;
+    row(`general-purpose solver${missed > 0 ? ` (${missed} of ${problems.length} not solved)` : ''}`, timeOfOne((k) => solver.solve(problems[k % problems.length])));
   }
   printTable(rows);
   console.log(`yardstick: ${yardstick.toFixed(2)} ms for ${ROOTS} square roots`);
+  console.log(solver ? solver.description : 'ml-levenberg-marquardt is not installed, so there is no general-purpose solver beside the engine.');
 }
 
 async function measurePage() {

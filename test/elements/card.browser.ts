@@ -80,13 +80,14 @@ describe('solute-card', () => {
   });
 
   it('falls back on unknown settings with a visible note', async () => {
-    const card = await makeCard({ solutes: ACIDIC, temperature: 'lukewarm', air: 'some', expanded: 'equations nonsense' });
+    const card = await makeCard({ solutes: ACIDIC, temperature: 'lukewarm', air: 'some', solids: 'fluffy', expanded: 'equations nonsense' });
     expect(card.state).to.equal('predicted');
     expect(card.prediction!.conditions.temperature).to.equal(25);
     expect(card.prediction!.conditions.air).to.equal('excluded');
+    expect(card.prediction!.conditions.solids).to.equal('watched');
     const notes = part(card, 'notes')!.textContent;
-    expect(notes).to.contain('lukewarm').and.to.contain('some').and.to.contain('nonsense');
-    expect(part(card, 'section-equations')!.hasAttribute('open')).to.equal(true);
+    expect(notes).to.contain('lukewarm').and.to.contain('some').and.to.contain('fluffy').and.to.contain('nonsense');
+    expect(part(card, 'section-open')).to.equal(part(card, 'section-equations'));
   });
 
   it('reads temperatures as number and text, and refuses impossible ones', async () => {
@@ -98,6 +99,16 @@ describe('solute-card', () => {
     card.temperature = 140;
     await card.predictionComplete;
     expect(card.problems[0]!.code).to.equal('temperature-out-of-range');
+  });
+
+  it('asks for a look at the bottle where a formula or a name fits more than one', async () => {
+    const card = await makeCard({ solutes: '5 g/L calcium chloride; 2 mmol/L C4H8O2' });
+    const doubts = [...card.shadowRoot!.querySelectorAll('[part~="assumption-doubt"]')].map(({ textContent }) => textContent);
+    expect(doubts).to.have.length(2);
+    expect(doubts[0]).to.contain('Check the bottle. Taken as anhydrous');
+    expect(doubts[1]).to.contain('isobutyric acid');
+    for (const text of doubts) expect(card.toText()).to.contain(text.trim());
+    expect(card.toHTML()).to.contain('<strong>Check the bottle.</strong> Taken as anhydrous');
   });
 
   it('passes the volume on', async () => {

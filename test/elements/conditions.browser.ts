@@ -38,6 +38,18 @@ describe('solute-conditions', () => {
     expect(stated(cards[1]!)).to.deep.equal([18, 'excluded']);
   });
 
+  it('provides whether solids may form', async () => {
+    const outer = await fixture<SoluteConditions>(html`<solute-conditions solids="equilibrated"><solute-card solutes="1 mol/kg Ca(OH)2"></solute-card></solute-conditions>`);
+    const card = outer.querySelector('solute-card')!;
+    await card.predictionComplete;
+    expect(card.prediction!.conditions.solids).to.equal('equilibrated');
+    outer.solids = 'perhaps';
+    await outer.updateComplete;
+    await card.predictionComplete;
+    expect(card.prediction!.conditions.solids).to.equal('watched');
+    expect(part(outer, 'notes')!.textContent).to.contain('perhaps').and.to.contain('watched, equilibrated');
+  });
+
   it('lets go of a card that is moved out', async () => {
     const { outer, cards } = await makePage();
     outer.after(cards[0]!);

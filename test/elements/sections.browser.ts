@@ -4,12 +4,16 @@ import type { SoluteCard } from '../../src/index.js';
 import { ACIDIC, BASIC, isChromium, makeCard, part } from './support.js';
 
 const SECTIONS = ['equations', 'composition', 'constants'] as const;
-const section = (card: SoluteCard, name: string) => part(card, `section-${name}`) as HTMLDetailsElement;
-const openSections = (card: SoluteCard) => SECTIONS.filter((name) => section(card, name).open);
+const section = (card: SoluteCard, name: string) => part(card, `section-${name}`)!;
+const summary = (card: SoluteCard, name: string) => section(card, name).querySelector<HTMLButtonElement>('[part~="summary"]')!;
+const openSections = (card: SoluteCard) => SECTIONS.filter((name) => {
+  const { height } = section(card, name).querySelector('.section-content')!.getBoundingClientRect();
+  expect(summary(card, name).getAttribute('aria-expanded')).to.equal(String(height > 0));
+  return height > 0;
+});
 
 async function toggle(card: SoluteCard, name: string): Promise<void> {
-  section(card, name).querySelector('summary')!.click();
-  await aTimeout(20);
+  summary(card, name).click();
   await card.updateComplete;
 }
 
@@ -44,8 +48,22 @@ describe('sections of solute-card', () => {
     expect(decisive.querySelector('.visually-hidden')!.textContent).to.match(/is in equilibrium with .*; decides the pH\.$/);
     expect(decisive.querySelectorAll('sub').length).to.be.greaterThan(0);
     expect(decisive.querySelector('.reaction')!.getAttribute('aria-hidden')).to.equal('true');
+    expect(decisive.querySelector('.constant')!.textContent).to.match(/^log10 \*β = −\d\.\d\d$/);
+    expect(decisive.querySelector('.visually-hidden')!.textContent).to.contain('log10 *β is minus ');
     const dissolution = part(card, 'equation')!.querySelector('.reaction')!;
     expect(dissolution.textContent.replace(/\s+/g, ' ').trim()).to.equal('Al2(SO4)3 → 2 Al3+ + 3 SO42−');
+  });
+
+  it('quote a proton transfer with K and pK, and complexes under a heading of their own by their logarithm', async () => {
+    const card = await makeCard({ solutes: '8 mmol/L CuSO4; 0.15 mol/L NH3', expanded: 'equations' });
+    const shown = section(card, 'equations');
+    const titles = [...shown.querySelectorAll('.group-title')].map(({ textContent }) => textContent);
+    expect(titles).to.include.members(['On dissolving', 'With water', 'Complexes']);
+    const complexes = [...shown.querySelectorAll('.equations')][titles.indexOf('Complexes')]!;
+    expect(complexes.querySelector('.constant')!.textContent).to.match(/^log10 β = \d+\.\d\d$/);
+    const facts = [...shown.querySelectorAll('.constant')].map(({ textContent }) => textContent.replace(/\s+/g, ' ').trim());
+    expect(facts.some((fact) => /^Kb = \d\.\d × 10−\d \(pKb \d\.\d\d\)$/.test(fact)), facts.join('; ')).to.equal(true);
+    expect(card.toHTML()).to.match(/\(log10 β \d+\.\d\d\)/);
   });
 
   it('show the source of each constant and what the uncertainty is made of', async () => {

@@ -1,6 +1,6 @@
 import { aTimeout, expect } from '@open-wc/testing';
 import type { SoluteCard, SoluteStoreEvent } from '../../src/index.js';
-import { ACIDIC, BASIC, makeCard, part } from './support.js';
+import { ACIDIC, BASIC, makeCard, part, UNKNOWN } from './support.js';
 
 const press = async (card: SoluteCard) => {
   part(card, 'store-button')!.click();
@@ -22,7 +22,7 @@ describe('storing', () => {
     await press(card);
     expect(detail!.record).to.equal(card.record);
     expect(detail!.source).to.equal('user');
-    expect(stateText(card)).to.equal('Announced to the page');
+    expect(stateText(card)).to.equal('Handed to the page, which has not confirmed it');
   });
 
   it('shows storing, then the reference of the page', async () => {
@@ -76,6 +76,25 @@ describe('storing', () => {
     card.solutes = BASIC;
     await card.predictionComplete;
     expect(stateText(card)).to.equal('');
+  });
+
+  it('waits for a result that is being made, and stores that one once', async () => {
+    const card = await makeCard({ solutes: ACIDIC });
+    const stored: unknown[] = [];
+    card.addEventListener('solute-store', ({ detail }) => stored.push(detail.record.solutes));
+    card.solutes = BASIC;
+    part(card, 'store-button')!.click();
+    part(card, 'store-button')!.click();
+    expect(stored).to.have.length(0);
+    await card.predictionComplete;
+    await settle(card);
+    expect(stored).to.deep.equal([BASIC]);
+    expect(stateText(card)).not.to.equal('');
+    card.solutes = UNKNOWN;
+    part(card, 'store-button')!.click();
+    await card.predictionComplete;
+    await settle(card);
+    expect(stored).to.have.length(1);
   });
 
   it('does nothing while disabled', async () => {

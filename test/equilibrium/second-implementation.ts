@@ -13,7 +13,7 @@ import type { ChemicalSystem, InteractionTable } from '../../src/equilibrium/che
 const Decimal = Base.clone({ precision: 50, maxE: 9e15, minE: -9e15 });
 type Decimal = Base;
 
-const decimal = (value: number | Decimal): Decimal => new Decimal(value);
+const decimal = (value: number | string | Decimal): Decimal => new Decimal(value);
 const ZERO = decimal(0);
 const ONE = decimal(1);
 const LN10 = Decimal.ln(10);
@@ -36,7 +36,7 @@ interface Layout {
   /** Species whose molality is unknown. */
   readonly free: readonly number[];
   readonly proton: number;
-  /** Species of every component that is the component itself. */
+  /** Species of every component that is the component itself; its constant is 1 up to rounding, which is kept. */
   readonly bare: readonly number[];
 }
 
@@ -44,7 +44,7 @@ function layoutOf(system: ChemicalSystem, table: InteractionTable): Layout {
   const free = system.species.flatMap(({ fixedMolality }, index) => (fixedMolality === undefined ? [index] : []));
   const proton = system.species.findIndex(({ protons, stoichiometry, fixedMolality }) => fixedMolality === undefined && protons === 1 && stoichiometry.length === 0);
   const bare = system.components.map((_, component) =>
-    system.species.findIndex(({ protons, stoichiometry, lnBeta, fixedMolality }) => fixedMolality === undefined && protons === 0 && lnBeta === 0 && stoichiometry.length === 1 && stoichiometry[0]![0] === component && stoichiometry[0]![1] === 1),
+    system.species.findIndex(({ protons, stoichiometry, lnBeta, fixedMolality }) => fixedMolality === undefined && protons === 0 && Math.abs(lnBeta) < 1e-9 && stoichiometry.length === 1 && stoichiometry[0]![0] === component && stoichiometry[0]![1] === 1),
   );
   if (proton < 0 || bare.includes(-1)) throw new Error('a component has no bare species');
   return { system, table, free, proton, bare };
@@ -110,7 +110,7 @@ function equationsAt({ system, table, free, proton, bare }: Layout, logarithms: 
       right = right.plus(lnActivity(proton).times(species[index]!.protons)).plus(medium.lnWater.times(species[index]!.water));
       for (const [part, number] of species[index]!.stoichiometry) {
         const held = components[part]!.lnActivity;
-        right = right.plus((held === undefined ? lnActivity(bare[part]!) : decimal(held)).times(number));
+        right = right.plus((held === undefined ? lnActivity(bare[part]!).minus(species[bare[part]!]!.lnBeta) : decimal(held)).times(number));
       }
     }
     residuals.push(lnActivity(index).minus(right));

@@ -65,8 +65,8 @@ test('1,000 cards never block the page for 50 ms', { timeout: 300_000 }, async (
       .sort((one, other) => other - one);
     console.log(`1,000 cards: ${Math.round((end.ts - begin.ts) / 1000)} ms in all, longest tasks ${tasks.slice(0, 5).map((task) => task.toFixed(1)).join(', ')} ms of processor time`);
     assert.ok(tasks.length > 50, 'the work is cut into tasks');
-    // A machine shared with other work stretches single tasks, also in processor time: one in a hundred may be longer.
-    assert.ok(tasks[Math.floor(tasks.length / 100)]! <= LONGEST_TASK);
+    // A machine shared with other work stretches single tasks, also in processor time: two may be longer.
+    assert.ok(tasks[2]! <= LONGEST_TASK);
   } finally {
     await browser.close();
     server.close();

@@ -15,7 +15,7 @@ describe('solute-card under a strict content security policy with Trusted Types'
     const cards = [...page.querySelectorAll('solute-card')] as SoluteCard[];
     await Promise.all(cards.map((card) => card.predictionComplete));
     expect(cards.map(({ state }) => state)).to.deep.equal(['predicted', 'problem', 'empty']);
-    cards[0]!.shadowRoot!.querySelector('summary')!.click();
+    cards[0]!.shadowRoot!.querySelector<HTMLElement>('[part~="summary"]')!.click();
     cards[0]!.shadowRoot!.querySelector('button')!.click();
     cards[2]!.solutes = '0.1 mol/L KCl';
     await cards[2]!.predictionComplete;

@@ -26,12 +26,14 @@ const mixtures = readValues<Mixture[]>('nbs-buffers').flatMap(({ fixed, added, a
   points.map(([millilitres, pH]): Value => ({ solutes: `${fixed}; ${((addedMolarity * millilitres) / 100).toPrecision(6)} mol/L ${added}`, temperature: 25, pH })),
 );
 const handbook = readValues<{ solutes: string; pH: number }[]>('approximate-values').map(({ solutes, pH }): Value => ({ solutes, temperature: 25, pH }));
+const reagents = readValues<Value[]>('reagent-solutions');
 
 /** Standard uncertainty taken for a published value itself, from how it is rounded and how it was made: common practice, no source. */
 const SETS: readonly (readonly [name: string, values: readonly Value[], ownUncertainty: number])[] = [
   ['reference buffer solutions', standards, 0.003],
   ['buffer mixtures', mixtures, 0.02],
   ['handbook values', handbook, 0.1],
+  ['solutions of reagents', reagents, 0.1],
 ];
 
 /** Amounts of these recipes are exact, so the digits in which they are written do not count. */

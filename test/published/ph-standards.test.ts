@@ -34,7 +34,7 @@ const MISSING: Readonly<Record<string, { readonly reason: string; readonly devia
     deviations: { 0: -0.024, 5: -0.019, 10: -0.021, 15: -0.019, 20: -0.025, 25: -0.027, 30: -0.027, 37: -0.012, 40: -0.019, 50: -0.021 },
   },
   'borax_0.05 secondary': {
-    reason: '0.2 mol/kg boron holds polyborate ions, whose constants are known at 25 °C alone; 0.05 low at 0 °C, inside 0.025 at 15 °C and above',
+    reason: '0.2 mol/kg boron holds polyborate ions, whose constants are known at 25 °C alone and move with the acid step of boric acid; 0.05 low at 0 °C, inside 0.025 at 15 °C and above',
     deviations: { 0: -0.049, 5: -0.036, 10: -0.027, 15: -0.022, 20: -0.021, 25: -0.005, 30: -0.005, 37: 0.008, 40: 0.01, 50: 0.02 },
   },
 };

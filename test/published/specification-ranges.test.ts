@@ -17,8 +17,10 @@ interface Range {
   readonly source: string;
 }
 
-/** Ranges that are not met, each with the reason; empty while all are met. */
-const MISSED: Readonly<Record<string, string>> = {};
+/** Ranges that are not met, each with the reason. */
+const MISSED: Readonly<Record<string, string>> = {
+  '50.0 g/L KAl(SO4)2·12H2O': 'no critical constant exists for mixed hydroxo-sulfato species of aluminium; 0.11 above the range beyond one standard uncertainty',
+};
 
 const checked = readValues<Range[]>('specification-ranges').map((range) => {
   const { inAir, withoutAir, uncertainty } = predict(range.solutes, { temperature: range.temperature });
@@ -45,6 +47,7 @@ describe('specification ranges', () => {
       inside ? 'inside' : met ? 'met' : 'missed',
     ]);
     for (const line of tableLines([['solution', 't', 'range', 'in air to without', 'u', ''], ...rows])) t.diagnostic(line);
+    for (const [solutes, reason] of Object.entries(MISSED)) t.diagnostic(`missed: ${solutes}: ${reason}`);
     t.diagnostic(`${checked.filter(({ met }) => met).length} of ${checked.length} met, ${checked.filter(({ inside }) => inside).length} wholly inside`);
     assert.ok(checked.length >= 30);
   });
