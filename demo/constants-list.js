@@ -5,6 +5,7 @@ import complexData from '/dist/lib/data/complexes.js';
 import densities from '/dist/lib/data/densities.js';
 import elementData from '/dist/lib/data/elements.js';
 import familyData from '/dist/lib/data/acid-base-families.js';
+import gasData from '/dist/lib/data/gases.js';
 import ionData from '/dist/lib/data/ions.js';
 import metalData from '/dist/lib/data/metal-ions.js';
 import solidData from '/dist/lib/data/solids.js';
@@ -149,6 +150,11 @@ const airConstants = [
   ...parameters('Air', `vapour pressure of water: ${provenance.waterVapour.form}`, air.waterVapour, provenance.waterVapour, { a: 'kPa', b: 'dimensionless', c: '°C' }),
 ];
 
+const gases = gasData.gases.map((constant) => ({
+  kind: 'Gas', of: [`${constant.name}: `, chemical(constant.species)], quantity: 'Henry constant, dissolved over gas', value: constant.henry, unit: constant.unit, ...shared(constant),
+  conditions: [...conditionsOf(constant), ...(constant.temperatureDependence === undefined ? [] : [`change with temperature ${constant.temperatureDependence} K`])],
+}));
+
 const densityConstants = [
   ...densities.solutes.map(({ formula, coefficients, temperatureRange, massFractionLimit }) => ({
     kind: 'Density', of: ['apparent density of ', { formula, charge: 0 }], quantity: 'c0 to c4', value: coefficients, unit: 'kg/m3, kg/m3, dimensionless, 1/°C, °C',
@@ -164,5 +170,5 @@ const atomicWeights = Object.entries(elementData.elements).map(([symbol, [value,
 }));
 
 export const constants = [
-  ...acidSteps, ...hydrolysis, ...complexes, ...solids, ...solubilities, ...interactions, ...waterConstants, ...airConstants, ...densityConstants, ...atomicWeights,
+  ...acidSteps, ...hydrolysis, ...complexes, ...solids, ...solubilities, ...interactions, ...waterConstants, ...airConstants, ...gases, ...densityConstants, ...atomicWeights,
 ];

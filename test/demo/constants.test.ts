@@ -35,6 +35,7 @@ const COUNTS: Readonly<Record<string, number>> = {
   Water: Object.values(water).reduce((sum, group) => sum + parametersOf(group), 0),
   // Beside the parameters of the two equations: carbon dioxide of room air, and the pressure.
   Air: parametersOf(air.carbonDioxide.solubility) + parametersOf(air.waterVapour) + 2,
+  Gas: read<{ gases: unknown[] }>('gases.json').gases.length,
   Density: densities.solutes.length + densities.volumes.length,
   'Atomic weight': Object.keys(elements).length,
 };
