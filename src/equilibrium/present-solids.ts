@@ -29,6 +29,15 @@ export class PresentSolids {
     return this.#exchanges < MOST_EXCHANGES;
   }
 
+  get any(): boolean {
+    return this.#present.length > 0;
+  }
+
+  /** States the conditions of the solids present anew, after the balances have been rewritten. */
+  restate(): void {
+    this.#apply(this.#present);
+  }
+
   /** Takes one step towards the stable set; false when it is reached. */
   exchange(): boolean {
     if (this.#solids.length === 0 || !this.decided) return false;

@@ -68,6 +68,12 @@ export function solveEquilibrium(system: ChemicalSystem, table: InteractionTable
     round = settle(balances, table, coefficients);
     iterations += round.iterations;
   }
+  if (present.any && round.settled && balances.residual() > REBASE_RESIDUAL) {
+    balances.rebase();
+    present.restate();
+    round = settle(balances, table, coefficients);
+    iterations += round.iterations;
+  }
   balances.minimise(coefficients, 0);
   const residual = balances.residual();
   return {

@@ -65,6 +65,19 @@ describe('solids in equilibrium', () => {
     );
   });
 
+  it('settle where the solution is a trace beside the solid', () => {
+    const hard = [
+      [[['7446-27-7', '0.09650 mol/kg']], 32, 'excluded'],
+      [[['7787-33-9', '1.019e-10 mol/kg'], ['7446-27-7', '6.572 mol/kg'], ['7631-90-5', '2.389e-11 mol/kg']], 49, 'equilibrated'],
+      [[['10476-86-5', '0.0004213 mol/kg'], ['7758-16-9', '5.206e-9 mol/kg'], ['13777-23-6', '1.168e-10 mol/kg'], ['513-79-1', '7.743 mol/kg']], 33, 'excluded'],
+    ] as const;
+    for (const [parts, temperature, air] of hard) {
+      const prediction = predict(parts.map(([substance, amount]) => ({ substance, amount })), { temperature, air, solids: 'equilibrated' });
+      assert.ok(prediction.residual <= 1e-10, String(prediction.residual));
+      assert.deepEqual(notFinite(prediction), []);
+    }
+  });
+
   it('do not form while they are only watched', () => {
     const { solids } = predict('0.1 mol/kg CaCl2; 0.1 mol/kg Na2CO3');
     const calcite = solids.find(({ id }) => id.startsWith('CaCO3'))!;
