@@ -68,13 +68,14 @@ export function solveEquilibrium(system: ChemicalSystem, table: InteractionTable
     round = settle(balances, table, coefficients);
     iterations += round.iterations;
   }
-  if (present.any && round.settled && balances.residual() > REBASE_RESIDUAL) {
+  balances.minimise(coefficients, 0);
+  if (present.any && round.settled && balances.residual() > RESIDUAL_TOLERANCE) {
     balances.rebase();
     present.restate();
     round = settle(balances, table, coefficients);
     iterations += round.iterations;
+    balances.minimise(coefficients, 0);
   }
-  balances.minimise(coefficients, 0);
   const residual = balances.residual();
   return {
     converged: round.settled && present.decided && residual <= RESIDUAL_TOLERANCE,
